@@ -1,0 +1,69 @@
+"""dropkit: fluid properties, numbers, models and design tools for turning liquids into drops."""
+
+from __future__ import annotations
+
+import importlib
+from typing import TYPE_CHECKING, Any
+
+__version__ = "0.1.0"
+
+if TYPE_CHECKING:
+    from dropkit import design, errors, models, numbers, plots
+    from dropkit.properties.catalogue import liquids
+    from dropkit.properties.comparison import compare
+    from dropkit.properties.frames import grid, lookup
+    from dropkit.properties.gas import air
+    from dropkit.properties.pure import liquid
+    from dropkit.properties.mixtures import mixture
+    from dropkit.properties.own import fluid
+    from dropkit.provenance import cite
+
+# Public name -> module that holds it; a name whose value is None is a module of its own.
+_HOMES: dict[str, str | None] = {
+    "air": "dropkit.properties.gas",
+    "cite": "dropkit.provenance",
+    "compare": "dropkit.properties.comparison",
+    "fluid": "dropkit.properties.own",
+    "grid": "dropkit.properties.frames",
+    "liquid": "dropkit.properties.pure",
+    "liquids": "dropkit.properties.catalogue",
+    "lookup": "dropkit.properties.frames",
+    "mixture": "dropkit.properties.mixtures",
+    "design": None,
+    "errors": None,
+    "models": None,
+    "numbers": None,
+    "plots": None,
+}
+
+__all__ = [
+    "air",
+    "cite",
+    "compare",
+    "design",
+    "errors",
+    "fluid",
+    "grid",
+    "liquid",
+    "liquids",
+    "lookup",
+    "mixture",
+    "models",
+    "numbers",
+    "plots",
+]
+
+
+def __getattr__(name: str) -> Any:
+    if name not in _HOMES:
+        raise AttributeError(f"module 'dropkit' has no attribute {name!r}")
+    home = _HOMES[name]
+    if home is None:
+        return importlib.import_module(f"dropkit.{name}")
+    value = getattr(importlib.import_module(home), name)
+    globals()[name] = value
+    return value
+
+
+def __dir__() -> list[str]:
+    return sorted({*globals(), *__all__})

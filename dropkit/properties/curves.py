@@ -1,0 +1,111 @@
+"""A property of one pure liquid over temperature, compiled from its records for speed.
+
+Several records of one property stand in order of preference: the first whose range
+holds the temperature serves it. Everything here is SI and unaware of units.
+"""
+
+from __future__ import annotations
+
+from collections.abc import Callable, Sequence
+from itertools import pairwise
+from typing import Any, NamedTuple, TypeAlias
+
+import numpy as np
+
+from dropkit.errors import RecordError
+from dropkit.properties.equations import FORMS
+from dropkit.records import PropertyRecord
+from dropkit.validity import Range
+
+__all__ = ["CHUNK", "Curve", "Fast", "FloatArray"]
+
+FloatArray: TypeAlias = "np.ndarray[Any, np.dtype[np.float64]]"
+
+# Elements per chunk: the work buffers of one chunk stay in the cache of a core.
+CHUNK = 16_384
+
+
+class Fast(NamedTuple):
+    """What a scalar look-up needs and no more."""
+
+    low: float
+    high: float
+    value: Callable[[float], float]
+
+
+class Curve:
+    """One property of a pure liquid: evaluators and ranges.
+
+    Parameters
+    ----------
+    records : sequence of PropertyRecord
+        In order of preference, at least one.
+    inside_mixtures : bool
+        Use the wider range that a record may state for use inside mixtures only.
+    """
+
+    def __init__(self, records: Sequence[PropertyRecord], *, inside_mixtures: bool = False) -> None:
+        self.records = tuple(records)
+        self.ranges = tuple(
+            (record.mixture_range or record.range) if inside_mixtures else record.range
+            for record in records
+        )
+        self.range = _union(self.records, self.ranges)
+        self._scalars = [FORMS[r.form].scalar(r.parameters) for r in records]
+        self._arrays = [FORMS[r.form].array(r.parameters) for r in records]
+        self.scalar = self._scalars[0] if len(self._scalars) == 1 else self._first_that_holds
+        ends = sorted({end for limits in self.ranges for end in (limits.low, limits.high)})
+        middles = [0.5 * (a + b) for a, b in pairwise(ends)]
+        self._ends = np.array(ends)
+        self._at_end = np.array([self.serving(end) for end in ends])
+        self._between = np.array(
+            [self.serving(t) for t in (ends[0] - 1.0, *middles, ends[-1] + 1.0)]
+        )
+
+    @property
+    def fast(self) -> Fast:
+        """Ends of the range and the scalar evaluator."""
+        return Fast(self.range.low, self.range.high, self.scalar)
+
+    def serving(self, temperature: float) -> int:
+        """Index of the record that serves a temperature [K]; the nearest one outside all ranges."""
+        for number, limits in enumerate(self.ranges):
+            if limits.low <= temperature <= limits.high:
+                return number
+        gaps = [max(r.low - temperature, temperature - r.high) for r in self.ranges]
+        return gaps.index(min(gaps))
+
+    def _first_that_holds(self, temperature: float) -> float:
+        return self._scalars[self.serving(temperature)](temperature)
+
+    def fill(self, temperature: FloatArray, out: FloatArray) -> None:
+        """Write the property at `temperature` [K], a flat float array, into `out` in place."""
+        if len(self.ranges) == 1:
+            self._arrays[0](temperature, out)
+            return
+        # Between two neighbouring ends one record serves throughout.
+        place = np.searchsorted(self._ends, temperature)
+        number = self._between[place]
+        at_end = self._ends[np.minimum(place, self._ends.size - 1)] == temperature
+        number[at_end] = self._at_end[place[at_end]]
+        for index, write in enumerate(self._arrays):
+            chosen = np.flatnonzero(number == index)
+            if chosen.size == out.size:
+                write(temperature, out)
+            elif chosen.size:
+                part = np.empty(chosen.size)
+                write(temperature[chosen], part)
+                out[chosen] = part
+
+
+def _union(records: Sequence[PropertyRecord], ranges: Sequence[Range]) -> Range:
+    ordered = sorted(ranges, key=lambda limits: limits.low)
+    high = ordered[0].high
+    for limits in ordered[1:]:
+        if limits.low > high:
+            raise RecordError(
+                f"{records[0].label}: the ranges of its records leave a gap from {high:g} "
+                f"to {limits.low:g} K"
+            )
+        high = max(high, limits.high)
+    return Range(ordered[0].low, high)

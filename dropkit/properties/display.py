@@ -1,0 +1,87 @@
+"""How liquids, mixtures, states and results show themselves: plain text and its HTML twin."""
+
+from __future__ import annotations
+
+from collections.abc import Iterable, Sequence
+from html import escape
+from typing import TYPE_CHECKING, Any
+
+import numpy as np
+
+from dropkit.unit_table import KINDS
+
+if TYPE_CHECKING:
+    from dropkit.properties.interface import Fluid
+
+__all__ = ["fluid_html", "fluid_text", "html_table", "in_stock", "number", "text_table", "unit_of"]
+
+ROOM = 293.15
+
+
+def unit_of(kind: str, *, with_units: bool = True) -> str:
+    """The unit in which values of a kind are shown: the trade's, or SI."""
+    entry = KINDS[kind]
+    unit = entry.stock if with_units else entry.si
+    return unit.replace("^", "") if unit not in ("", "1", "dimensionless") else "-"
+
+
+def in_stock(kind: str, value: Any) -> Any:
+    """An SI value in the trade's unit of its kind (not for temperatures)."""
+    return value / KINDS[kind].per_stock
+
+
+def number(value: Any, figures: int = 4) -> str:
+    """A number with a few significant figures, or the span of an array."""
+    array = np.asarray(value, dtype=float)
+    if array.ndim == 0:
+        return f"{float(array):.{figures}g}"
+    if not np.isfinite(array).any():
+        return f"NaN, shape {array.shape}"
+    low, high = np.nanmin(array), np.nanmax(array)
+    return f"{low:.{figures}g} ... {high:.{figures}g}, shape {array.shape}"
+
+
+def text_table(header: Sequence[str], rows: Iterable[Sequence[str]]) -> str:
+    """Columns padded to their widest entry."""
+    lines = [tuple(header), *(tuple(row) for row in rows)]
+    widths = [max(len(line[i]) for line in lines) for i in range(len(header))]
+    return "\n".join(
+        "  ".join(cell.ljust(width) for cell, width in zip(line, widths, strict=True)).rstrip()
+        for line in lines
+    )
+
+
+def html_table(header: Sequence[str], rows: Iterable[Sequence[str]], caption: str = "") -> str:
+    """The same table as HTML."""
+    head = "".join(f"<th>{escape(cell)}</th>" for cell in header)
+    body = "".join(
+        "<tr>" + "".join(f"<td>{escape(cell)}</td>" for cell in row) + "</tr>" for row in rows
+    )
+    title = f"<caption>{escape(caption)}</caption>" if caption else ""
+    return f"<table>{title}<thead><tr>{head}</tr></thead><tbody>{body}</tbody></table>"
+
+
+_HEADER = ("property", "at 20 degC", "unit", "grade", "range")
+
+
+def _fluid_rows(fluid: Fluid) -> list[tuple[str, ...]]:
+    rows = []
+    for prop in fluid.available():
+        limits = fluid.range(prop)
+        inside = limits.low <= ROOM <= limits.high
+        value = fluid._evaluate(prop, ROOM, "nan") if inside else None
+        shown = "" if value is None else number(in_stock(prop, value))
+        span = f"{limits.low - 273.15:.4g} to {limits.high - 273.15:.4g} degC"
+        rows.append((prop, shown, unit_of(prop), fluid.grade(prop), span))
+    return rows
+
+
+def fluid_text(fluid: Fluid, title: str) -> str:
+    """A liquid or mixture as plain text."""
+    return f"{title}\n{text_table(_HEADER, _fluid_rows(fluid))}"
+
+
+def fluid_html(fluid: Fluid, title: str) -> str:
+    """A liquid or mixture as an HTML table with its cautions."""
+    notes = "".join(f"<li>{escape(text)}</li>" for text in fluid.cautions)
+    return html_table(_HEADER, _fluid_rows(fluid), title) + (f"<ul>{notes}</ul>" if notes else "")

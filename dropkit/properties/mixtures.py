@@ -1,0 +1,394 @@
+"""Mixtures of dropkit's liquids and solutes, and `mixture`, which makes them."""
+
+from __future__ import annotations
+
+import warnings
+from collections.abc import Callable, Mapping
+from typing import Any, Final, Literal
+
+import numpy as np
+
+from dropkit import records
+from dropkit.errors import BadInput, EstimateRefused, EstimateWarning, MissingProperty, NotALiquid
+from dropkit.properties import display
+from dropkit.properties.composition import (
+    Composition,
+    check_basis,
+    from_mass,
+    read_composition,
+)
+from dropkit.properties.curves import FloatArray
+from dropkit.properties.interface import GRADED, PROPERTIES, Fluid
+from dropkit.properties.mixing.blend import Blend, blend
+from dropkit.properties.mixing.redlich_kister import RULES
+from dropkit.properties.pure import (
+    Liquid,
+    quotient_trail,
+    record_use,
+    relative_uncertainty,
+    versions,
+)
+from dropkit.provenance import Trail, worst_grade
+from dropkit.validity import Range, settle
+
+__all__ = ["Mixture", "mixture"]
+
+ESTIMATES: Final = ("warn", "allow", "refuse")
+FIRE_NOTE: Final = (
+    "the mixture's flash point is not predicted; a mist or foam can burn below it; water does "
+    "not make it non-flammable; follow the safety data sheet and local codes"
+)
+
+
+def mixture(
+    components: Mapping[str, Any],
+    *,
+    by: str | None = None,
+    normalise: bool = False,
+    measured_at: Any = 293.15,
+    estimates: Literal["warn", "allow", "refuse"] = "warn",
+) -> Mixture:
+    """A mixture by composition.
+
+    Parameters
+    ----------
+    components : mapping of str to amount, fraction or "rest"
+        Amounts with units (``"62 g"``, ``"250 mL"``, ``"2 mol"``) fix the basis and are
+        normalised; ``"38 %"`` and bare fractions need `by`; ``"rest"`` is one minus the
+        others. Fractions may be arrays that broadcast.
+    by : {"mass", "mole", "volume"}, optional
+        Basis of fractions; there is no default. ``"volume"`` means volumes before mixing.
+    normalise : bool
+        Accept fractions whose sum misses 1 by up to 0.002.
+    measured_at : temperature
+        Where volumes were measured [K]; 20 degC by default, listed under assumptions.
+    estimates : {"warn", "allow", "refuse"}
+        What to do where a pair has no measured record: warn once, say nothing, or
+        refuse the property.
+
+    Returns
+    -------
+    Mixture
+        With every property as a method of temperature.
+
+    Raises
+    ------
+    CompositionError, BasisMissing
+        A composition that does not add up, or has no basis.
+    UnknownName, AmbiguousName
+        A component that is not known.
+    NotALiquid
+        Nothing but solids.
+
+    Examples
+    --------
+    >>> import dropkit as dk
+    >>> ink = dk.mixture({"glycerol": 0.38, "water": "rest"}, by="mass")
+    >>> 1e3 < ink.density(293.15) < 1.2e3
+    True
+    """
+    composition = read_composition(
+        components, by=by, normalise=normalise, measured_at=measured_at
+    )
+    return Mixture(composition, estimates=estimates)
+
+
+class Mixture(Fluid):
+    """Liquids and dissolved solids at stated mass fractions.
+
+    Made by `mixture`; see there for an example.
+
+    Parameters
+    ----------
+    composition : Composition
+        Mass fractions of the components.
+    estimates : {"warn", "allow", "refuse"}
+        What to do where a pair has no measured record.
+    """
+
+    def __init__(
+        self,
+        composition: Composition,
+        *,
+        estimates: Literal["warn", "allow", "refuse"] = "warn",
+        quiet: bool = False,
+    ) -> None:
+        super().__init__()
+        if estimates not in ESTIMATES:
+            raise BadInput(
+                f"estimates={estimates!r} is not known", allowed="'warn', 'allow' or 'refuse'"
+            )
+        self._composition = composition
+        self._estimates = estimates
+        present = [np.any(np.asarray(w) > 0.0) for w in composition.fractions]
+        self._keys = tuple(k for k, here in zip(composition.keys, present, strict=True) if here)
+        self._mass = tuple(
+            w for w, here in zip(composition.fractions, present, strict=True) if here
+        )
+        entries = [records.liquid_record(key) for key in self._keys]
+        if all(entry.kind != "liquid" for entry in entries):
+            raise NotALiquid(
+                f"{', '.join(entry.name for entry in entries)}: a mixture needs a liquid",
+                hint="Add the solvent, such as 'water': 'rest'",
+            )
+        self._pure = Liquid(entries[0]) if len(entries) == 1 else None
+        self.name = self._title(entries)
+        self._blends: dict[str, Blend | MissingProperty] = {}
+        if estimates == "warn" and not quiet:
+            self._warn()
+
+    def __reduce__(self) -> tuple[Any, ...]:
+        return (_rebuild, (self._composition, self._estimates))
+
+    def _title(self, entries: list[records.LiquidRecord]) -> str:
+        parts = []
+        for entry, w in zip(entries, self._mass, strict=True):
+            share = f"{100 * w:.4g} %" if np.ndim(w) == 0 else "array"
+            parts.append(f"{entry.name} {share}")
+        return " + ".join(parts) + " by mass" if len(parts) > 1 else entries[0].name
+
+    def _warn(self) -> None:
+        estimated, refused = [], []
+        for prop in GRADED:
+            found = self._blend(prop) if self._pure is None else None
+            if isinstance(found, EstimateRefused):
+                refused.append(prop)
+            elif isinstance(found, Blend) and found.estimated:
+                share = f"{prop} (+-{200 * found.estimate_error:.2g} %)"
+                estimated.append(share)
+        if not (estimated or refused):
+            return
+        text = f"{self.name}: pairs without measured records."
+        if estimated:
+            text += f" Estimated: {', '.join(estimated)} at 95 %."
+        if refused:
+            text += f" Refused: {', '.join(refused)}."
+        warnings.warn(
+            text + " estimates='allow' silences this, 'refuse' forbids them.",
+            EstimateWarning,
+            stacklevel=4,
+        )
+
+    # ------------------------------------------------ composition
+    @property
+    def components(self) -> tuple[str, ...]:
+        """Record keys of the components, in the order given."""
+        return self._composition.keys
+
+    @property
+    def mass_fractions(self) -> dict[str, Any]:
+        """Mass fraction of each component; floats or arrays."""
+        return dict(zip(self._composition.keys, self._composition.fractions, strict=True))
+
+    def fractions(self, by: str = "mass", *, measured_at: float = 293.15) -> dict[str, Any]:
+        """Fraction of each component on a basis.
+
+        Parameters
+        ----------
+        by : {"mass", "mole", "volume"}
+            ``"volume"`` means volumes before mixing at `measured_at` [K].
+        measured_at : float
+            Temperature [K] of those volumes.
+        """
+        check_basis(by)
+        keys = self._composition.keys
+        shares = from_mass(keys, self._composition.fractions, by, measured_at)
+        return dict(zip(keys, shares, strict=True))
+
+    @property
+    def molar_mass(self) -> Any:
+        """Mean molar mass [kg/mol], salts counted as one unit."""
+        moles = sum(
+            w / records.liquid_record(key).molar_mass
+            for key, w in zip(self._composition.keys, self._composition.fractions, strict=True)
+        )
+        return 1.0 / moles
+
+    @property
+    def cautions(self) -> tuple[str, ...]:
+        """Flash points and hazards of the components, and what they don't say of the mixture."""
+        if self._pure is not None:
+            return self._pure.cautions
+        texts: list[str] = []
+        fire = False
+        for key in self._keys:
+            entry = records.liquid_record(key)
+            if entry.kind != "liquid":
+                notes = (entry.facts.get("hazards") or {}).get("notes", ())
+                texts += [f"{entry.name}: {note}" for note in notes]
+                continue
+            part = Liquid(entry)
+            texts += part.cautions
+            fire = fire or part.flash_point is not None
+        if fire:
+            texts.append(FIRE_NOTE)
+        return tuple(texts)
+
+    @property
+    def assumptions(self) -> tuple[str, ...]:
+        """What was taken for granted in reading the composition."""
+        return self._composition.assumptions
+
+    # ------------------------------------------------ what Fluid asks for
+    def _blend(self, prop: str) -> Blend | MissingProperty:
+        if prop not in self._blends:
+            try:
+                found: Blend | MissingProperty = blend(prop, self._keys)
+                assert isinstance(found, Blend)
+                _ = found.range
+            except MissingProperty as problem:
+                found = problem
+            if isinstance(found, Blend) and found.estimated and self._estimates == "refuse":
+                pairs = ", ".join(
+                    f"{found.records[i].name} + {found.records[j].name}" for i, j in found.unfitted
+                )
+                found = EstimateRefused(
+                    f"The {prop} of {self.name} could only be estimated: no measured record of "
+                    f"{pairs or 'the salt in this solvent'}",
+                    hint="estimates='allow' gives the estimate with its error",
+                )
+            self._blends[prop] = found
+        return self._blends[prop]
+
+    def _need(self, prop: str) -> Blend:
+        found = self._blend(prop)
+        if isinstance(found, MissingProperty):
+            raise found
+        return found
+
+    def _missing(self, prop: str) -> MissingProperty:
+        if self._pure is not None:
+            return self._pure._missing(prop)
+        if prop == "kinematic_viscosity":
+            prop = "viscosity" if isinstance(self._blend("viscosity"), MissingProperty) else "density"
+        found = self._blend(prop)
+        return found if isinstance(found, MissingProperty) else super()._missing(prop)
+
+    def available(self) -> tuple[str, ...]:
+        """Names of the properties that can be given for this mixture."""
+        if self._pure is not None:
+            return self._pure.available()
+        held = {prop for prop in RULES if isinstance(self._blend(prop), Blend)}
+        if {"density", "viscosity"} <= held:
+            held.add("kinematic_viscosity")
+        return tuple(prop for prop in PROPERTIES if prop in held)
+
+    def _range(self, prop: str) -> Range:
+        if self._pure is not None:
+            return self._pure._range(prop)
+        if prop == "kinematic_viscosity":
+            density, viscosity = self._range("density"), self._range("viscosity")
+            return Range(max(density.low, viscosity.low), min(density.high, viscosity.high))
+        return self._need(prop).range
+
+    def _shape(self) -> tuple[int, ...]:
+        return self._composition.shape
+
+    def _broadcast(self, shape: tuple[int, ...]) -> Fluid:
+        if self._shape() == ():
+            return self
+        flat = tuple(np.broadcast_to(w, shape).reshape(-1) for w in self._mass)
+        return Mixture(Composition(self._keys, flat), estimates=self._estimates, quiet=True)
+
+    def _scalar(self, prop: str) -> Callable[[float], float] | None:
+        if self._shape() != ():
+            return None
+        if self._pure is not None:
+            return self._pure._scalar(prop)
+        if prop == "kinematic_viscosity":
+            density, viscosity = self._scalar("density"), self._scalar("viscosity")
+            assert density is not None
+            assert viscosity is not None
+            return lambda temperature: viscosity(temperature) / density(temperature)
+        return self._need(prop).scalar(self._mass)
+
+    def _fill(self, prop: str, part: slice, temperature: FloatArray, out: FloatArray) -> None:
+        if self._pure is not None:
+            self._pure._fill(prop, part, temperature, out)
+            return
+        if prop == "kinematic_viscosity":
+            density = np.empty_like(out)
+            self._fill("viscosity", part, temperature, out)
+            self._fill("density", part, temperature, density)
+            np.divide(out, density, out=out)
+            return
+        mass = [w[part] if np.ndim(w) else w for w in self._mass]
+        self._need(prop).fill(mass, temperature, out)
+
+    def _settle_composition(self, prop: str, outside: str) -> Any:
+        if self._pure is not None:
+            return False
+        if prop == "kinematic_viscosity":
+            gone = self._settle_composition("density", outside)
+            return gone | self._settle_composition("viscosity", outside)
+        mask: Any = False
+        for top, bottom, limits, _ in self._need(prop).limits():
+            if limits.low <= 0.0 and limits.high >= 1.0:
+                continue
+            total = np.asarray(sum(self._mass[i] for i in bottom), dtype=float)
+            share = np.full(total.shape, np.nan)
+            np.divide(sum(self._mass[i] for i in top), total, out=share, where=total > 0.0)
+            value: Any = share if share.ndim else float(share)
+            mask = mask | settle(f"{prop} of {self.name}", value, limits, outside)
+        return mask
+
+    def _trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
+        if self._pure is not None:
+            return self._pure._trail(prop, temperature)
+        if prop == "kinematic_viscosity":
+            return quotient_trail(self, temperature)
+        rule = self._need(prop)
+        used = [curve.records[0] for curve in rule.curves] + rule.blocks
+        grades = [block.grade for block in used]
+        if rule.estimated:
+            grades.append("estimated")
+        assumptions = list(self.assumptions)
+        if len(rule.solvents) > 2:
+            assumptions.append("no ternary terms: each pair enters at its own ratio")
+        assumptions += [
+            f"{rule.records[i].name} + {rule.records[j].name}: no measured record, no excess"
+            for i, j in rule.unfitted
+        ]
+        if rule.solutes and len(rule.solvents) > 1:
+            assumptions.append("the salt acts on the mixed solvent as it does on water")
+        cautions = [text for block in used for text in block.cautions]
+        if prop == "viscosity":
+            cautions.append("viscosity at low shear")
+        return Trail(
+            property=prop,
+            subject=self.name,
+            method=rule.method,
+            grade=worst_grade(grades),
+            uncertainty=self._spread(rule, prop, temperature),
+            records=tuple(record_use(block) for block in used),
+            assumptions=tuple(dict.fromkeys(assumptions)),
+            cautions=tuple(dict.fromkeys(cautions)),
+            versions=versions(),
+        )
+
+    def _spread(self, rule: Blend, prop: str, temperature: float | FloatArray | None) -> float:
+        """Relative standard uncertainty: of the pairs, the pure ends by their share, and estimates."""
+        value = None
+        if temperature is not None:
+            found = np.asarray(self._evaluate(prop, temperature, "nan"))
+            value = float(np.nanmin(found)) if np.isfinite(found).any() else None
+        shares = [float(np.max(x)) for x in rule._fractions(self._mass)]
+        ends = sum(
+            share * relative_uncertainty(curve.records[0], value)
+            for share, curve in zip(shares, rule.curves, strict=True)
+        )
+        pairs = max((relative_uncertainty(block, value) for block in rule.blocks), default=0.0)
+        return float(np.hypot(max(ends, pairs), rule.estimate_error))
+
+    # ------------------------------------------------ display
+    def __repr__(self) -> str:
+        return display.fluid_text(self, f"Mixture {self.name}")
+
+    def _repr_html_(self) -> str:
+        return display.fluid_html(self, f"Mixture {self.name}")
+
+
+def _rebuild(
+    composition: Composition, estimates: Literal["warn", "allow", "refuse"]
+) -> Mixture:
+    return Mixture(composition, estimates=estimates, quiet=True)

@@ -1,0 +1,403 @@
+"""A user's own values: `fluid` for a liquid known by a few numbers, and overlays on any fluid."""
+
+from __future__ import annotations
+
+import math
+from collections.abc import Callable, Mapping
+from dataclasses import dataclass
+from itertools import pairwise
+from typing import Any, Final
+
+import numpy as np
+
+from dropkit import units
+from dropkit.errors import BadInput
+from dropkit.properties import display
+from dropkit.properties.curves import FloatArray
+from dropkit.properties.interface import PROPERTIES, Fluid, property_name
+from dropkit.properties.pure import quotient_trail, versions
+from dropkit.provenance import Trail
+from dropkit.validity import Range
+
+__all__ = ["OwnFluid", "fluid", "overlay"]
+
+# A value stated at one temperature serves this far around it.
+AROUND: Final = 0.5  # K
+# Straight lines in ln(y) over 1/T for these, in y over T for the rest.
+_EXPONENTIAL: Final = ("viscosity", "kinematic_viscosity", "vapour_pressure")
+
+
+@dataclass(frozen=True, slots=True)
+class OwnCurve:
+    """Values of one property: a constant, one at a stated temperature, or (T, value) pairs.
+
+    Parameters
+    ----------
+    property : str
+        What it gives.
+    temperatures, values : tuple of float
+        Pairs [K, SI]; empty temperatures mean a constant at all temperatures.
+    """
+
+    property: str
+    temperatures: tuple[float, ...]
+    values: tuple[float, ...]
+
+    @property
+    def range(self) -> Range:
+        """Where the values hold."""
+        if not self.temperatures:
+            return Range(0.0, math.inf)
+        if len(self.temperatures) == 1:
+            return Range(self.temperatures[0] - AROUND, self.temperatures[0] + AROUND)
+        return Range(self.temperatures[0], self.temperatures[-1])
+
+    @property
+    def method(self) -> str:
+        """The rule in one line."""
+        if not self.temperatures:
+            return "own value, held constant over temperature"
+        if len(self.temperatures) == 1:
+            return f"own value at {self.temperatures[0] - 273.15:g} degC"
+        line = "ln(value) over 1/T" if self.property in _EXPONENTIAL else "value over T"
+        return f"own {len(self.values)} values, straight lines in {line}"
+
+    def scalar(self, temperature: float) -> float:
+        """Value [SI] at a temperature [K]."""
+        if len(self.values) == 1:
+            return self.values[0]
+        return float(self.array(np.array([temperature]))[0])
+
+    def array(self, temperature: FloatArray) -> FloatArray:
+        """Values [SI] at temperatures [K]; end segments go on outside."""
+        if len(self.values) == 1:
+            return np.full(temperature.shape, self.values[0])
+        curved = self.property in _EXPONENTIAL
+        x = 1.0 / temperature if curved else temperature
+        known = np.array(self.temperatures)
+        place = np.clip(np.searchsorted(known, temperature, side="right") - 1, 0, known.size - 2)
+        nodes = 1.0 / known if curved else known
+        y = np.log(self.values) if curved else np.array(self.values)
+        slope = np.diff(y) / np.diff(nodes)
+        line = y[place] + slope[place] * (x - nodes[place])
+        return np.exp(line) if curved else line
+
+
+def fluid(
+    name: str,
+    *,
+    at: Any = None,
+    uncertainty: Mapping[str, float] | None = None,
+    plausible: bool = True,
+    **values: Any,
+) -> OwnFluid:
+    """A liquid of your own, known by a few numbers.
+
+    Parameters
+    ----------
+    name : str
+        What tables call it.
+    at : temperature, optional
+        Where the numbers were measured [K]; they then hold within 0.5 K. Without it,
+        numbers hold at all temperatures, and the assumptions say so.
+    uncertainty : mapping, optional
+        Relative standard uncertainty (k = 1) by property.
+    plausible : bool
+        False accepts values that no ordinary liquid has.
+    **values
+        Properties by name: a number (SI), one with a unit, or a list of
+        ``(temperature, value)`` pairs, between which straight lines are drawn (in ln(value)
+        over 1/T for viscosities and vapour pressure).
+
+    Returns
+    -------
+    OwnFluid
+        With the same interface as a liquid of the database; grade "own".
+
+    Raises
+    ------
+    UnknownName
+        For a property that does not exist.
+    UnitError, ImplausibleValue, BadInput
+        For a slip in a value, with the likely cure.
+
+    Examples
+    --------
+    >>> import dropkit as dk
+    >>> mine = dk.fluid(
+    ...     "trial coating 7",
+    ...     density="1050 kg/m3",
+    ...     viscosity=[("20 degC", "5.1 mPa*s"), ("40 degC", "2.9 mPa*s")],
+    ...     surface_tension="31 mN/m",
+    ... )
+    >>> round(mine.viscosity(303.15) * 1e3, 2)
+    3.81
+    """
+    if not isinstance(name, str) or not name.strip():
+        raise BadInput(f"The name of a fluid is text, not {name!r}")
+    if not values:
+        raise BadInput(f"{name} has no values", allowed="at least one of " + ", ".join(PROPERTIES))
+    curves = _read(values, at, plausible)
+    if {"viscosity", "kinematic_viscosity"} <= curves.keys():
+        raise BadInput(
+            f"{name} has both viscosity and kinematic_viscosity",
+            allowed="one of the two; the other follows from the density",
+        )
+    spreads = {property_name(prop): _spread(prop, u) for prop, u in (uncertainty or {}).items()}
+    return OwnFluid(name, curves, spreads=spreads)
+
+
+def overlay(base: Fluid, values: Mapping[str, Any], *, at: Any, plausible: bool) -> OwnFluid:
+    """`base` with some of its properties replaced; see `Fluid.with_values`."""
+    if not values:
+        raise BadInput("No values to replace", allowed="at least one of " + ", ".join(PROPERTIES))
+    curves = _read(values, at, plausible)
+    if {"viscosity", "kinematic_viscosity"} <= curves.keys():
+        raise BadInput("viscosity and kinematic_viscosity are both given", allowed="one of the two")
+    trends = {}
+    if at is not None:
+        kelvin = float(units.to_si(at, "temperature", "at"))
+        for prop, curve in curves.items():
+            scalar = base._shape() == () and len(curve.values) == 1
+            if scalar and prop in base.available():
+                trends[prop] = curve.values[0] / base._evaluate(prop, kelvin, "raise")
+    return OwnFluid(base.name, curves, base=base, trends=trends)
+
+
+class OwnFluid(Fluid):
+    """A user's values, alone or on top of another fluid.
+
+    Made by `fluid` and `Fluid.with_values`; see there for an example.
+
+    Parameters
+    ----------
+    name : str
+        What tables call it.
+    curves : mapping
+        The user's values by property.
+    base : Fluid, optional
+        The fluid that gives what the user's values don't.
+    trends : mapping
+        Properties that follow the base's temperature trend, with the factor on it.
+    spreads : mapping
+        Relative standard uncertainty by property.
+    """
+
+    def __init__(
+        self,
+        name: str,
+        curves: Mapping[str, OwnCurve],
+        *,
+        base: Fluid | None = None,
+        trends: Mapping[str, float] | None = None,
+        spreads: Mapping[str, float] | None = None,
+    ) -> None:
+        super().__init__()
+        self.name = name
+        self._curves = dict(curves)
+        self._base = base
+        self._trends = dict(trends or {})
+        self._spreads = dict(spreads or {})
+
+    def __getstate__(self) -> dict[str, Any]:
+        # The quick evaluators are functions of the moment; they are made again on use.
+        return {**self.__dict__, "_fast": {}}
+
+    # ------------------------------------------------ what Fluid asks for
+    def available(self) -> tuple[str, ...]:
+        """Names of the properties that are given or follow."""
+        held = set(self._curves)
+        if self._base is not None:
+            held.update(self._base.available())
+        if "density" in held and "viscosity" in held:
+            held.add("kinematic_viscosity")
+        if "density" in held and "kinematic_viscosity" in held:
+            held.add("viscosity")
+        return tuple(prop for prop in PROPERTIES if prop in held)
+
+    def _route(self, prop: str) -> str:
+        """Where a property comes from: "trend", "own", "product", "quotient" or "base"."""
+        if prop in self._trends:
+            return "trend"
+        if prop in self._curves:
+            return "own"
+        if prop == "viscosity" and "kinematic_viscosity" in self._curves:
+            return "product"
+        if prop == "kinematic_viscosity":
+            return "quotient"
+        return "base"
+
+    def _parts(self, prop: str) -> tuple[str, str]:
+        other = "kinematic_viscosity" if prop == "viscosity" else "viscosity"
+        return other, "density"
+
+    def _from_base(self) -> Fluid:
+        assert self._base is not None
+        return self._base
+
+    def _range(self, prop: str) -> Range:
+        route = self._route(prop)
+        if route == "own":
+            return self._curves[prop].range
+        if route in ("product", "quotient"):
+            first, second = (self._range(part) for part in self._parts(prop))
+            low, high = max(first.low, second.low), min(first.high, second.high)
+            if low > high:
+                raise BadInput(
+                    f"{self.name}: viscosity and density are given at different temperatures"
+                )
+            return Range(low, high)
+        return self._from_base()._range(prop)
+
+    def _shape(self) -> tuple[int, ...]:
+        return self._base._shape() if self._base is not None else ()
+
+    def _broadcast(self, shape: tuple[int, ...]) -> Fluid:
+        if self._base is None or self._shape() == ():
+            return self
+        wide = self._base._broadcast(shape)
+        return OwnFluid(self.name, self._curves, base=wide, trends=self._trends)
+
+    def _scalar(self, prop: str) -> Callable[[float], float] | None:
+        route = self._route(prop)
+        if self._shape() != ():
+            return None
+        if route == "own":
+            return self._curves[prop].scalar
+        if route in ("product", "quotient"):
+            first, second = (self._scalar(part) for part in self._parts(prop))
+            assert first is not None
+            assert second is not None
+            if route == "product":
+                return lambda temperature: first(temperature) * second(temperature)
+            return lambda temperature: first(temperature) / second(temperature)
+        value = self._from_base()._scalar(prop)
+        if route == "trend" and value is not None:
+            factor, inner = self._trends[prop], value
+            return lambda temperature: factor * inner(temperature)
+        return value
+
+    def _fill(self, prop: str, part: slice, temperature: FloatArray, out: FloatArray) -> None:
+        route = self._route(prop)
+        if route == "own":
+            out[:] = self._curves[prop].array(temperature)
+        elif route in ("product", "quotient"):
+            other, density = self._parts(prop)
+            second = np.empty_like(out)
+            self._fill(other, part, temperature, out)
+            self._fill(density, part, temperature, second)
+            (np.multiply if route == "product" else np.divide)(out, second, out=out)
+        else:
+            self._from_base()._fill(prop, part, temperature, out)
+            if route == "trend":
+                out *= self._trends[prop]
+
+    def _settle_composition(self, prop: str, outside: str) -> Any:
+        route = self._route(prop)
+        if route == "own" or self._base is None:
+            return False
+        if route in ("product", "quotient"):
+            first, second = self._parts(prop)
+            mask = self._settle_composition(first, outside)
+            return mask | self._settle_composition(second, outside)
+        return self._base._settle_composition(prop, outside)
+
+    def _trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
+        route = self._route(prop)
+        if route == "base":
+            return self._from_base()._trail(prop, temperature)
+        if route == "quotient":
+            return quotient_trail(self, temperature)
+        if route == "product":
+            other = self._curves["kinematic_viscosity"]
+            return self._own_trail(prop, f"kinematic viscosity times density ({other.method})", ())
+        if route == "trend":
+            curve = self._curves[prop]
+            return self._own_trail(
+                prop,
+                f"{curve.method}, times the trend of the record",
+                (f"{prop} follows the record's temperature trend away from the own value",),
+            )
+        curve = self._curves[prop]
+        constant = not curve.temperatures
+        assumed = (f"{prop} held constant over temperature",) if constant else ()
+        return self._own_trail(prop, curve.method, assumed)
+
+    def _own_trail(self, prop: str, method: str, assumptions: tuple[str, ...]) -> Trail:
+        cautions = ("viscosity at low shear",) if prop == "viscosity" else ()
+        return Trail(
+            property=prop,
+            subject=self.name,
+            method=method,
+            grade="own",
+            uncertainty=self._spreads.get(prop),
+            assumptions=assumptions,
+            cautions=cautions,
+            versions=versions(),
+        )
+
+    @property
+    def cautions(self) -> tuple[str, ...]:
+        """Those of the fluid underneath; of one's own fluid only its maker knows more."""
+        if self._base is not None:
+            return self._base.cautions
+        return (f"{self.name}: own values; hazards are in its safety data sheet, not here",)
+
+    def __repr__(self) -> str:
+        return display.fluid_text(self, f"Fluid {self.name}, own values")
+
+    def _repr_html_(self) -> str:
+        return display.fluid_html(self, f"Fluid {self.name}, own values")
+
+
+def _spread(prop: str, value: Any) -> float:
+    number = float(units.to_si(value, "ratio", f"uncertainty of {prop}"))
+    if not 0.0 <= number < 1.0:
+        raise BadInput(f"The uncertainty of {prop} is {number:g}", allowed="relative, 0 to 1")
+    return number
+
+
+def _read(values: Mapping[str, Any], at: Any, plausible: bool) -> dict[str, OwnCurve]:
+    where = None if at is None else float(units.to_si(at, "temperature", "at"))
+    if where is not None and math.isnan(where):
+        raise BadInput("at is NaN", allowed="a temperature")
+    return {
+        property_name(prop): _read_one(prop, value, where, plausible)
+        for prop, value in values.items()
+    }
+
+
+def _read_one(prop: str, value: Any, at: float | None, plausible: bool) -> OwnCurve:
+    pairs = _as_pairs(value)
+    if pairs is None:
+        number = units.to_si(value, prop, prop, plausible=plausible)
+        if not isinstance(number, float) or math.isnan(number):
+            raise BadInput(
+                f"{prop} of a fluid is {value!r}",
+                allowed="one number, one with a unit, or a list of (temperature, value) pairs",
+            )
+        return OwnCurve(prop, () if at is None else (at,), (number,))
+    known = sorted(
+        (
+            float(units.to_si(t, "temperature", f"temperature of {prop}")),
+            float(units.to_si(y, prop, prop, plausible=plausible)),
+        )
+        for t, y in pairs
+    )
+    if not known or any(math.isnan(t) or math.isnan(y) for t, y in known):
+        raise BadInput(f"{prop} has no pairs or a NaN among them")
+    for (first, _), (second, _) in pairwise(known):
+        if first == second:
+            raise BadInput(f"{prop} is given twice at {first:g} K", allowed="one value each")
+    return OwnCurve(prop, tuple(t for t, _ in known), tuple(y for _, y in known))
+
+
+def _as_pairs(value: Any) -> list[tuple[Any, Any]] | None:
+    """A list of (temperature, value) pairs, or None where `value` is a single value."""
+    if isinstance(value, np.ndarray) and value.ndim == 2 and value.shape[1] == 2:
+        return [(float(t), float(y)) for t, y in value]
+    if not isinstance(value, list):
+        return None
+    if not all(isinstance(item, list | tuple) and len(item) == 2 for item in value):
+        return None
+    return [(item[0], item[1]) for item in value]

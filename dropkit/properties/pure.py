@@ -1,0 +1,322 @@
+"""Pure liquids from dropkit's own records, and `liquid`, which finds them by name."""
+
+from __future__ import annotations
+
+import warnings
+from collections.abc import Callable
+from typing import Any, Final
+
+import numpy as np
+
+from dropkit import __version__, records
+from dropkit.errors import NotALiquid, RecalledWarning
+from dropkit.properties import display
+from dropkit.properties.catalogue import resolve
+from dropkit.properties.curves import CHUNK, Curve, FloatArray
+from dropkit.properties.interface import PROPERTIES, Fluid
+from dropkit.provenance import RecordUse, Trail, worst_grade
+from dropkit.validity import Range
+
+__all__ = ["Liquid", "liquid", "quotient_trail", "record_use", "relative_uncertainty", "versions"]
+
+# Below this conductivity a liquid keeps the charge that flow puts on it.
+STATIC_ACCUMULATOR: Final = 50e-12  # S/m; IEC TS 60079-32-1 and API RP 2003 use it, from memory
+
+
+def liquid(name: str) -> Liquid:
+    """A pure liquid by name, synonym, trade short form or CAS number.
+
+    Parameters
+    ----------
+    name : str
+        Such as ``"water"``, ``"IPA"`` or ``"56-81-5"``.
+
+    Returns
+    -------
+    Liquid
+        With every property as a method of temperature.
+
+    Raises
+    ------
+    UnknownName
+        With the nearest names.
+    AmbiguousName
+        For names such as ``"xylene"`` that stand for several liquids.
+    NotALiquid
+        For a solid that dropkit knows as a solute only.
+
+    Examples
+    --------
+    >>> import dropkit as dk
+    >>> round(dk.liquid("water").density(293.15), 1)
+    998.2
+    """
+    return _load(resolve(name))
+
+
+def _load(key: str) -> Liquid:
+    return Liquid(records.liquid_record(key))
+
+
+class Liquid(Fluid):
+    """A pure saturated liquid, read from its record.
+
+    Made by `liquid`; see there for an example.
+
+    Parameters
+    ----------
+    record : LiquidRecord
+        The record, as `dropkit.records.liquid_record` gives it.
+    """
+
+    def __init__(self, record: records.LiquidRecord) -> None:
+        super().__init__()
+        if record.kind != "liquid":
+            raise NotALiquid(
+                f"{record.name} is a solid: it is a solute here, not a liquid",
+                hint=f"Use it in a mixture: mixture({{'{record.name}': 0.1, 'water': 'rest'}}, "
+                "by='mass')",
+            )
+        self.record = record
+        self.key = record.key
+        self.name = record.name
+        self._curves: dict[str, Curve] = {}
+        recalled = [
+            prop
+            for prop, blocks in record.properties.items()
+            if prop in PROPERTIES and any(block.grade == "recalled" for block in blocks)
+        ]
+        if recalled:
+            warnings.warn(
+                f"{record.name}: {', '.join(recalled)} from memory (grade 'recalled'): "
+                "uncertain by 5 % at least",
+                RecalledWarning,
+                stacklevel=3,
+            )
+
+    def __reduce__(self) -> tuple[Any, ...]:
+        return (_load, (self.key,))
+
+    def __eq__(self, other: object) -> bool:
+        return isinstance(other, Liquid) and other.record == self.record
+
+    def __hash__(self) -> int:
+        return hash(("Liquid", self.key))
+
+    # ------------------------------------------------ facts
+    @property
+    def cas(self) -> str:
+        """CAS registry number."""
+        return self.record.cas
+
+    @property
+    def formula(self) -> str:
+        """Molecular formula."""
+        return self.record.formula
+
+    @property
+    def molar_mass(self) -> float:
+        """Molar mass [kg/mol]."""
+        return self.record.molar_mass
+
+    @property
+    def melting_point(self) -> float | None:
+        """Melting point at 101325 Pa [K], where the record has it."""
+        return self.record.melting_point
+
+    @property
+    def boiling_point(self) -> float | None:
+        """Boiling point at 101325 Pa [K], where the record has it."""
+        return self.record.boiling_point
+
+    @property
+    def critical_temperature(self) -> float | None:
+        """Critical temperature [K], where the record has it."""
+        return self.record.critical_temperature
+
+    @property
+    def flash_point(self) -> dict[str, Any] | None:
+        """Flash point: value [K], method, source and place; None where the record has none."""
+        fact = self.record.facts.get("flash_point")
+        return dict(fact) if fact else None
+
+    @property
+    def cautions(self) -> tuple[str, ...]:
+        """What to know before use: flash point, static charge, hazards, surface state."""
+        return tuple(self._liquid_cautions())
+
+    def _liquid_cautions(self) -> list[str]:
+        texts = []
+        flash = self.flash_point
+        if flash:
+            texts.append(
+                f"{self.name}: flash point {flash['value'] - 273.15:.0f} degC "
+                f"({flash.get('method', 'method not stated')}; {flash['source']})"
+            )
+        conductivity = self.record.properties.get("electrical_conductivity", ())
+        if any(_lowest(block) < STATIC_ACCUMULATOR for block in conductivity):
+            texts.append(f"{self.name}: below 50 pS/m, static accumulator")
+        hazards = self.record.facts.get("hazards") or {}
+        texts += [f"{self.name}: {note}" for note in hazards.get("notes", ())]
+        texts += self.record.cautions
+        return texts
+
+    # ------------------------------------------------ what Fluid asks for
+    def available(self) -> tuple[str, ...]:
+        """Names of the properties that the record holds, kinematic viscosity included."""
+        held = self.record.properties
+        return tuple(
+            prop
+            for prop in PROPERTIES
+            if prop in held
+            or (prop == "kinematic_viscosity" and "density" in held and "viscosity" in held)
+        )
+
+    def curve(self, prop: str, *, inside_mixtures: bool = False) -> Curve:
+        """The compiled records of a property; for dropkit's own layers."""
+        name = f"{prop}+" if inside_mixtures else prop
+        if name not in self._curves:
+            if prop not in self.record.properties:
+                raise self._missing(prop)
+            blocks = self.record.properties[prop]
+            self._curves[name] = Curve(blocks, inside_mixtures=inside_mixtures)
+        return self._curves[name]
+
+    def _range(self, prop: str) -> Range:
+        if prop == "kinematic_viscosity":
+            density, viscosity = self.curve("density").range, self.curve("viscosity").range
+            return Range(max(density.low, viscosity.low), min(density.high, viscosity.high))
+        return self.curve(prop).range
+
+    def _scalar(self, prop: str) -> Callable[[float], float]:
+        if prop == "kinematic_viscosity":
+            density, viscosity = self.curve("density").scalar, self.curve("viscosity").scalar
+            return lambda temperature: viscosity(temperature) / density(temperature)
+        return self.curve(prop).scalar
+
+    def _fill(self, prop: str, part: slice, temperature: FloatArray, out: FloatArray) -> None:
+        if prop == "kinematic_viscosity":
+            density = np.empty_like(out)
+            self.curve("viscosity").fill(temperature, out)
+            self.curve("density").fill(temperature, density)
+            np.divide(out, density, out=out)
+        else:
+            self.curve(prop).fill(temperature, out)
+
+    def _trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
+        if prop == "kinematic_viscosity":
+            return quotient_trail(self, temperature)
+        curve = self.curve(prop)
+        serving = _serving(curve, temperature)
+        blocks = [curve.records[number] for number in serving]
+        value = None if temperature is None else _midvalue(curve, temperature)
+        cautions = [text for block in blocks for text in block.cautions]
+        if prop == "viscosity":
+            cautions.append("viscosity at low shear")
+        cautions += self.phase_cautions(temperature)
+        return Trail(
+            property=prop,
+            subject=self.name,
+            method="; ".join(dict.fromkeys(f"{b.form} ({b.obtained})" for b in blocks)),
+            grade=worst_grade(block.grade for block in blocks),
+            uncertainty=max(relative_uncertainty(block, value) for block in blocks),
+            records=tuple(record_use(block) for block in blocks),
+            cautions=tuple(dict.fromkeys(cautions)),
+            versions=versions(),
+        )
+
+    def phase_cautions(self, temperature: float | FloatArray | None) -> list[str]:
+        """``supercooled`` below the melting point, the pressure needed above the boiling point."""
+        if temperature is None or not np.size(temperature):
+            return []
+        low, high = float(np.nanmin(temperature)), float(np.nanmax(temperature))
+        texts = []
+        if self.melting_point is not None and low < self.melting_point:
+            texts.append(f"supercooled: {self.name} melts at {self.melting_point - 273.15:.1f} degC")
+        if self.boiling_point is not None and high > self.boiling_point:
+            need = ""
+            if "vapour_pressure" in self.record.properties:
+                curve = self.curve("vapour_pressure")
+                if curve.range.low <= high <= curve.range.high:
+                    need = f"needs p >= {curve.scalar(high) / 1e5:.3g} bar (absolute)"
+            texts.append(
+                f"{need or 'needs pressure'} to stay liquid: {self.name} boils at "
+                f"{self.boiling_point - 273.15:.1f} degC at 1 atm"
+            )
+        return texts
+
+    # ------------------------------------------------ display
+    def __repr__(self) -> str:
+        return display.fluid_text(self, f"Liquid {self.name}, CAS {self.cas}, {self.formula}")
+
+    def _repr_html_(self) -> str:
+        return display.fluid_html(self, f"Liquid {self.name}, CAS {self.cas}, {self.formula}")
+
+
+def versions() -> dict[str, str]:
+    """Versions of dropkit and its data, for trails."""
+    return {"dropkit": __version__, "data": records.data_version()}
+
+
+def record_use(block: records.PropertyRecord) -> RecordUse:
+    """A record as it stands in a trail."""
+    return RecordUse(
+        record=block.label,
+        property=block.property,
+        form=block.form,
+        grade=block.grade,
+        sources=block.sources,
+        place=block.place,
+        obtained=block.obtained,
+        range=str(block.range),
+        uncertainty=relative_uncertainty(block, None),
+    )
+
+
+def relative_uncertainty(block: records.PropertyRecord, value: float | None) -> float:
+    """Relative standard uncertainty of a record, from an absolute one by way of a value."""
+    if block.uncertainty_absolute is None:
+        return block.uncertainty
+    scale = value if value is not None else block.checks[0].value
+    return block.uncertainty_absolute / scale
+
+
+def _serving(curve: Curve, temperature: float | FloatArray | None) -> list[int]:
+    """Numbers of the records that serve some temperatures; all of them for None."""
+    if temperature is None or len(curve.records) == 1:
+        return list(range(len(curve.records)))
+    kelvin = np.unique(np.asarray(temperature, dtype=float))
+    return sorted({curve.serving(t) for t in kelvin[~np.isnan(kelvin)]}) or [0]
+
+
+def _midvalue(curve: Curve, temperature: float | FloatArray) -> float | None:
+    """The smallest value over some temperatures, clear of the ends of the range."""
+    kelvin = np.asarray(temperature, dtype=float).reshape(-1)
+    kelvin = kelvin[(kelvin >= curve.range.low) & (kelvin <= curve.range.high)]
+    if not kelvin.size:
+        return None
+    out = np.empty(kelvin.size)
+    curve.fill(np.ascontiguousarray(kelvin), out)
+    return float(out.min())
+
+
+def _lowest(block: records.PropertyRecord) -> float:
+    """Value of a record at the low end of its range."""
+    return Curve([block]).scalar(block.range.low)
+
+
+def quotient_trail(fluid: Fluid, temperature: float | FloatArray | None) -> Trail:
+    """The trail of kinematic viscosity from those of viscosity and density."""
+    parts = [fluid._trail(name, temperature) for name in ("viscosity", "density")]
+    known = [part.uncertainty for part in parts if part.uncertainty is not None]
+    return Trail(
+        property="kinematic_viscosity",
+        subject=fluid.name,
+        method=f"viscosity over density ({'; '.join(dict.fromkeys(p.method for p in parts))})",
+        grade=worst_grade(part.grade for part in parts),
+        uncertainty=float(np.hypot.reduce(known)) if known else None,
+        records=tuple(record for part in parts for record in part.records),
+        assumptions=tuple(dict.fromkeys(text for part in parts for text in part.assumptions)),
+        cautions=tuple(dict.fromkeys(text for part in parts for text in part.cautions)),
+        versions=parts[0].versions,
+    )

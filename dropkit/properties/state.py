@@ -1,0 +1,382 @@
+"""`State`: the frozen numbers of one fluid at one condition, all that the upper layers need."""
+
+from __future__ import annotations
+
+from typing import TYPE_CHECKING, Any
+
+import numpy as np
+
+from dropkit import units
+from dropkit.errors import BadInput, MissingProperty
+from dropkit.properties import display
+from dropkit.properties.interface import GRADED, PROPERTIES, Fluid, property_name
+from dropkit.provenance import Grade, Trail, worst_grade
+from dropkit.validity import Outside
+
+if TYPE_CHECKING:
+    import pandas as pd
+
+__all__ = ["State"]
+
+_COLUMNS = ("property", "value", "unit", "95 %", "method", "grade", "sources", "range")
+
+
+class State:
+    """Frozen properties of a fluid at one temperature or an array of temperatures.
+
+    Made by ``fluid.at(temperature)``. Each property is an attribute, computed on first
+    access and then kept; one that the fluid lacks raises MissingProperty at access.
+    A state asked for with a unit gives Quantities, one asked for in SI gives SI;
+    `si` and `with_units` turn it over.
+
+    Parameters
+    ----------
+    fluid : Fluid
+        The liquid, mixture or user's fluid.
+    temperature : float or ndarray
+        Temperature [K].
+    with_units : bool
+        Whether properties come as Quantities.
+    outside : {"raise", "warn", "nan", "allow"}
+        The range policy.
+
+    Examples
+    --------
+    >>> import dropkit as dk
+    >>> state = dk.liquid("water").at("20 degC")
+    >>> round(state.si().density, 1)
+    998.2
+    """
+
+    def __init__(
+        self,
+        fluid: Fluid | None,
+        temperature: Any,
+        *,
+        with_units: bool = False,
+        outside: Outside = "raise",
+        name: str = "",
+    ) -> None:
+        self._fluid = fluid
+        self._temperature = temperature
+        self._with_units = with_units
+        self._outside = outside
+        self.name = fluid.name if fluid is not None else name
+        self._values: dict[str, Any] = {}
+        self._trails: dict[str, Trail] = {}
+        self._cautions: tuple[str, ...] | None = None
+
+    # ------------------------------------------------ how it was asked
+    def si(self) -> State:
+        """The same state giving SI floats and arrays."""
+        return self._turned(False)
+
+    def with_units(self) -> State:
+        """The same state giving Quantities."""
+        return self._turned(True)
+
+    def _turned(self, with_units: bool) -> State:
+        twin = State(
+            self._fluid,
+            self._temperature,
+            with_units=with_units,
+            outside=self._outside,
+            name=self.name,
+        )
+        twin._values, twin._trails, twin._cautions = self._values, self._trails, self._cautions
+        return twin
+
+    def _give(self, kind: str, value: Any) -> Any:
+        return units.give(value, kind, units.Asked() if self._with_units else None)
+
+    # ------------------------------------------------ values
+    def _si(self, prop: str) -> Any:
+        if prop not in self._values:
+            if self._fluid is None:
+                raise MissingProperty(
+                    f"{self.name} has no {prop}", allowed="it has " + ", ".join(self.available())
+                )
+            value = self._fluid._evaluate(prop, self._temperature, self._outside)
+            if isinstance(value, np.ndarray):
+                value.flags.writeable = False
+            self._values[prop] = value
+        return self._values[prop]
+
+    def _property(self, prop: str) -> Any:
+        return self._give(prop, self._si(prop))
+
+    @property
+    def temperature(self) -> Any:
+        """Temperature [K]."""
+        return self._give("temperature", self._temperature)
+
+    @property
+    def density(self) -> Any:
+        """Density [kg/m3]."""
+        return self._property("density")
+
+    @property
+    def viscosity(self) -> Any:
+        """Dynamic viscosity at low shear [Pa*s]."""
+        return self._property("viscosity")
+
+    @property
+    def kinematic_viscosity(self) -> Any:
+        """Kinematic viscosity [m2/s]."""
+        return self._property("kinematic_viscosity")
+
+    @property
+    def surface_tension(self) -> Any:
+        """Surface tension [N/m]."""
+        return self._property("surface_tension")
+
+    @property
+    def vapour_pressure(self) -> Any:
+        """Vapour pressure, absolute [Pa]."""
+        return self._property("vapour_pressure")
+
+    @property
+    def heat_of_vaporisation(self) -> Any:
+        """Heat of vaporisation [J/kg]."""
+        return self._property("heat_of_vaporisation")
+
+    @property
+    def heat_capacity(self) -> Any:
+        """Isobaric heat capacity of the liquid [J/(kg*K)]."""
+        return self._property("heat_capacity")
+
+    @property
+    def thermal_conductivity(self) -> Any:
+        """Thermal conductivity [W/(m*K)]."""
+        return self._property("thermal_conductivity")
+
+    @property
+    def static_permittivity(self) -> Any:
+        """Relative static permittivity [-]."""
+        return self._property("static_permittivity")
+
+    @property
+    def speed_of_sound(self) -> Any:
+        """Speed of sound [m/s]."""
+        return self._property("speed_of_sound")
+
+    @property
+    def refractive_index(self) -> Any:
+        """Refractive index at 589 nm [-]."""
+        return self._property("refractive_index")
+
+    @property
+    def diffusivity_in_air(self) -> Any:
+        """Diffusivity of the vapour in air at 101325 Pa [m2/s]."""
+        return self._property("diffusivity_in_air")
+
+    @property
+    def electrical_conductivity(self) -> Any:
+        """Electrical conductivity, an order of magnitude [S/m]."""
+        return self._property("electrical_conductivity")
+
+    # ------------------------------------------------ what it rests on
+    def available(self) -> tuple[str, ...]:
+        """Names of the properties that can be asked."""
+        if self._fluid is not None:
+            return self._fluid.available()
+        return tuple(prop for prop in PROPERTIES if prop in self._values)
+
+    def trail(self, prop: str) -> Trail:
+        """How a property was made."""
+        property_name(prop)
+        if prop not in self._trails:
+            if self._fluid is None or prop not in self._fluid.available():
+                self._si(prop)  # raises, naming what there is
+            assert self._fluid is not None
+            self._trails[prop] = self._fluid._trail(prop, self._temperature)
+        return self._trails[prop]
+
+    def grade(self, prop: str | None = None) -> Grade:
+        """The grade of a property, or the worst of density, viscosity and surface tension."""
+        if prop is not None:
+            return self.trail(prop).grade
+        held = [self.trail(name).grade for name in GRADED if name in self.available()]
+        return worst_grade(held) if held else "estimated"
+
+    def uncertainty(self, prop: str) -> float | None:
+        """Relative standard uncertainty (k = 1), where one is stated."""
+        return self.trail(prop).uncertainty
+
+    @property
+    def cautions(self) -> tuple[str, ...]:
+        """What to know before use: of the fluid, and of this temperature."""
+        if self._cautions is None:
+            texts = list(self._fluid.cautions) if self._fluid is not None else []
+            for prop in GRADED:
+                if prop in self.available():
+                    texts += self.trail(prop).cautions
+            self._cautions = tuple(dict.fromkeys(texts))
+        return self._cautions
+
+    @property
+    def assumptions(self) -> tuple[str, ...]:
+        """What was taken for granted in any property."""
+        texts = (text for prop in self.available() for text in self.trail(prop).assumptions)
+        return tuple(dict.fromkeys(texts))
+
+    @property
+    def sources(self) -> tuple[str, ...]:
+        """Keys of the sources that the properties rest on."""
+        keys = (key for prop in self.available() for key in self.trail(prop).sources)
+        return tuple(dict.fromkeys(keys))
+
+    # ------------------------------------------------ upper layers
+    def numbers(self, length: Any, velocity: Any = None, **surroundings: Any) -> Any:
+        """The table of all dimensionless numbers that can be formed.
+
+        Parameters
+        ----------
+        length : float, array or with a unit
+            Diameter of the jet, nozzle or drop [m].
+        velocity : float, array or with a unit, optional
+            Velocity of the liquid [m/s].
+        **surroundings
+            As `dropkit.numbers.numbers_sheet` takes them: gas, frequency and so on.
+
+        Returns
+        -------
+        NumbersSheet
+            Each number with what it compares and the limits that the trade quotes.
+        """
+        # The one stated exception to the order of the layers: see DEVELOPERS.md.
+        from dropkit.numbers.sheet import numbers_sheet
+
+        return numbers_sheet(self, length, velocity, **surroundings)
+
+    # ------------------------------------------------ tables, dicts, display
+    def table(self, *, estimates: bool = True) -> pd.DataFrame:
+        """Every property with unit, uncertainty, method, grade, source and range.
+
+        Parameters
+        ----------
+        estimates : bool
+            False leaves properties of grade "estimated" out.
+
+        Returns
+        -------
+        pandas.DataFrame
+            One row per property, indexed by its name; for arrays, the value column
+            holds one array per row. `uncertainty` is relative, k = 1; `uncertainty_95`
+            is in the unit of the value. Properties that cannot be given here stand
+            with NaN and the reason.
+        """
+        import pandas as pd
+
+        rows = []
+        for prop in self.available():
+            try:
+                value, trail = self._si(prop), self.trail(prop)
+            except (ValueError, LookupError) as problem:
+                rows.append({"property": prop, "value": float("nan"), "method": str(problem)})
+                continue
+            if trail.grade == "estimated" and not estimates:
+                continue
+            shown = display.in_stock(prop, value) if self._with_units else value
+            spread = trail.uncertainty
+            rows.append(
+                {
+                    "property": prop,
+                    "value": shown,
+                    "unit": display.unit_of(prop, with_units=self._with_units),
+                    "uncertainty": float("nan") if spread is None else spread,
+                    "uncertainty_95": float("nan") if spread is None else 2.0 * spread * shown,
+                    "grade": trail.grade,
+                    "method": trail.method,
+                    "sources": ", ".join(trail.sources),
+                    "range": trail.range,
+                }
+            )
+        return pd.DataFrame(rows).set_index("property")
+
+    def to_dict(self) -> dict[str, Any]:
+        """A dict of plain types that survives JSON; `from_dict` rebuilds the state."""
+        values, trails = {}, {}
+        for prop in self.available():
+            try:
+                value, trail = self._si(prop), self.trail(prop)
+            except (ValueError, LookupError):
+                continue
+            values[prop] = _plain(value)
+            trails[prop] = trail.to_dict()
+        return {
+            "kind": "State",
+            "name": self.name,
+            "temperature": _plain(self._temperature),
+            "with_units": self._with_units,
+            "values": values,
+            "trails": trails,
+            "cautions": list(self.cautions),
+        }
+
+    @classmethod
+    def from_dict(cls, data: dict[str, Any]) -> State:
+        """Rebuild a state from `to_dict`; it keeps its numbers and trails, not its fluid."""
+        if not isinstance(data, dict) or data.get("kind") != "State":
+            raise BadInput("This is no dict of a State", allowed="what State.to_dict() gave")
+        state = cls(
+            None, _array(data["temperature"]), with_units=data["with_units"], name=data["name"]
+        )
+        state._values = {prop: _array(value) for prop, value in data["values"].items()}
+        state._trails = {prop: Trail.from_dict(entry) for prop, entry in data["trails"].items()}
+        state._cautions = tuple(data["cautions"])
+        return state
+
+    def _rows(self) -> list[tuple[str, ...]]:
+        rows = []
+        for prop in self.available():
+            try:
+                value, trail = self._si(prop), self.trail(prop)
+            except (ValueError, LookupError) as problem:
+                rows.append((prop, "", "", "", str(problem), "", "", ""))
+                continue
+            shown = display.in_stock(prop, value) if self._with_units else value
+            spread = "" if trail.uncertainty is None else f"+-{200 * trail.uncertainty:.2g} %"
+            rows.append(
+                (
+                    prop,
+                    display.number(shown),
+                    display.unit_of(prop, with_units=self._with_units),
+                    spread,
+                    trail.method,
+                    trail.grade,
+                    ", ".join(trail.sources),
+                    trail.range,
+                )
+            )
+        return rows
+
+    @property
+    def _title(self) -> str:
+        kelvin = display.number(self._temperature, 6)
+        celsius = display.number(np.asarray(self._temperature) - 273.15, 4)
+        return f"{self.name} at {celsius} degC ({kelvin} K)"
+
+    def __repr__(self) -> str:
+        short = [row[:4] + row[5:6] for row in self._rows()]
+        return f"{self._title}\n" + display.text_table((*_COLUMNS[:4], "grade"), short)
+
+    def _repr_html_(self) -> str:
+        notes = "".join(f"<li>{display.escape(text)}</li>" for text in self.cautions)
+        table = display.html_table(_COLUMNS, self._rows(), self._title)
+        return table + (f"<ul>{notes}</ul>" if notes else "")
+
+
+def _plain(value: Any) -> Any:
+    """Floats and nested lists; NaN as None, which JSON has."""
+    if isinstance(value, np.ndarray):
+        return [_plain(item) for item in value]
+    number = float(value)
+    return None if np.isnan(number) else number
+
+
+def _array(value: Any) -> Any:
+    """Back from `_plain`."""
+    if isinstance(value, list):
+        return np.array(value, dtype=float)
+    return float("nan") if value is None else value
