@@ -178,14 +178,16 @@ class Store:
         found = self._sources.get(key)
         if found is None:
             with LOCK:
-                if not self._holds("sources", key):
-                    raise UnknownName(
-                        f"there is no source '{key}'",
-                        allowed="the name of a file in data/sources, without .toml",
-                        choices=nearest(str(key), self.stems("sources")),
-                    )
-                found = read_source(key, parse_file(self.root, f"sources/{key}.toml"))
-                self._sources[key] = found
+                found = self._sources.get(key)
+                if found is None:
+                    if not self._holds("sources", key):
+                        raise UnknownName(
+                            f"there is no source '{key}'",
+                            allowed="the name of a file in data/sources, without .toml",
+                            choices=nearest(str(key), self.stems("sources")),
+                        )
+                    found = read_source(key, parse_file(self.root, f"sources/{key}.toml"))
+                    self._sources[key] = found
         return found
 
     def _holds(self, folder: str, stem: str) -> bool:
@@ -199,10 +201,11 @@ class Store:
 
     def ambiguous(self) -> Mapping[str, Any]:
         """Names that stand for several liquids, from ``data/ambiguous.toml``."""
-        if self._ambiguous is None:
-            held = os.path.isfile(os.path.join(self.root, AMBIGUOUS))
-            self._ambiguous = Table(parse_file(self.root, AMBIGUOUS) if held else {})
-        return self._ambiguous
+        with LOCK:
+            if self._ambiguous is None:
+                held = os.path.isfile(os.path.join(self.root, AMBIGUOUS))
+                self._ambiguous = Table(parse_file(self.root, AMBIGUOUS) if held else {})
+            return self._ambiguous
 
     def index(self) -> Mapping[str, Any]:
         """The generated index; the files themselves are scanned where it doesn't match them."""

@@ -13,25 +13,23 @@ import re
 import sys
 import tempfile
 import tomllib
-from collections.abc import Iterator, Sequence
+from collections.abc import Sequence
 from pathlib import Path
 from typing import Final
 
 from dropkit.errors import RecordError, nearest
+from dropkit.record_rules import problems
 from dropkit.record_schema import read_liquid, read_pair
 from dropkit.record_store import INDEX, Store, parse_file, seal_of
-from dropkit.record_types import LiquidRecord, PairRecord, PropertyRecord
 from dropkit.records import data_dir
 
-__all__ = ["grade_problems", "main", "problems", "sealed_text", "source_keys"]
+__all__ = ["main", "sealed_text"]
 
 FOLDERS: Final = ("liquids", "mixtures")
-# An archive: its rows carry the DOI of the paper, each an independent source.
-ARCHIVES: Final = ("ThermoMLArchive",)
-LEAST_RECALLED: Final = 0.05
 
 _SEAL_LINE: Final = re.compile(r"^seal[ \t]*=[^\r\n]*", re.MULTILINE)
-_TABLE_LINE: Final = re.compile(r"^\[", re.MULTILINE)
+# The first table, with the blank lines and comments that lead to it.
+_TABLE_LINE: Final = re.compile(r"^(?:[ \t]*(?:#[^\r\n]*)?\r?\n)*\[", re.MULTILINE)
 
 
 def sealed_text(text: str, seal: str) -> str:
@@ -59,114 +57,18 @@ def sealed_text(text: str, seal: str) -> str:
     candidates = []
     if match := _SEAL_LINE.search(text):
         candidates.append(text[: match.start()] + line + text[match.end() :])
-    for match in _TABLE_LINE.finditer(text):
+    if match := _TABLE_LINE.search(text):
         candidates.append(text[: match.start()] + line + newline + text[match.start() :])
-        break
     candidates.append(line + newline + text)
-    wanted = {**tomllib.loads(text), "seal": seal}
+    content = seal_of(tomllib.loads(text))
     for candidate in candidates:
         try:
-            if tomllib.loads(candidate) == wanted:
-                return candidate
+            data = tomllib.loads(candidate)
         except tomllib.TOMLDecodeError:
             continue
+        if data.get("seal") == seal and seal_of(data) == content:
+            return candidate
     raise RecordError("no place for the seal line", hint='Write seal = "" before the first table')
-
-
-def source_keys(record: LiquidRecord | PairRecord) -> Iterator[tuple[str, str]]:
-    """Where each source key of a record stands, and the key."""
-    if isinstance(record, LiquidRecord):
-        for name, fact in record.facts.items():
-            yield name, fact["source"]
-    for blocks in record.properties.values():
-        for block in blocks:
-            for key in block.sources:
-                yield block.label, key
-            if block.second is not None:
-                for key in _second_sources(block):
-                    yield f"{block.label}: second", key
-            for check in block.checks:
-                yield f"{block.label}: check at {check['T']:g} K", check["source"]
-
-
-def _second_sources(block: PropertyRecord) -> tuple[str, ...]:
-    if block.second is None:
-        return ()
-    return tuple(dict.fromkeys((block.second["source"], *block.second.get("sources", ()))))
-
-
-def grade_problems(block: PropertyRecord) -> list[str]:
-    """What a record lacks for the grade that it claims.
-
-    Parameters
-    ----------
-    block : PropertyRecord
-        The record.
-
-    Returns
-    -------
-    list of str
-        Empty where the grade is deserved.
-    """
-    found = []
-    own = set(block.sources)
-    second = set(_second_sources(block))
-    everybody = own | second
-    if block.grade == "measured":
-        if block.second is None:
-            found.append("grade 'measured' needs an independent check: second = { ... }")
-        if len(everybody) < 2 and not everybody & set(ARCHIVES):
-            found.append("grade 'measured' needs two independent sources")
-    if block.grade == "reference":
-        checked = second | {check["source"] for check in block.checks}
-        if not checked - own:
-            found.append(
-                "grade 'reference' needs one independent check: second or a check point "
-                "whose source is not among sources"
-            )
-    if block.grade == "recalled" and block.uncertainty < LEAST_RECALLED:
-        found.append(
-            f"grade 'recalled' needs an uncertainty of at least {LEAST_RECALLED}, "
-            f"not {block.uncertainty:g}"
-        )
-    if block.grade in ("own", "estimated"):
-        found.append(f"grade '{block.grade}' is for results, not for data files")
-    return [f"{block.label}: {text}" for text in found]
-
-
-def problems(store: Store, record: LiquidRecord | PairRecord) -> list[str]:
-    """What is wrong with a record beyond the format of its file.
-
-    Parameters
-    ----------
-    store : Store
-        The data folder.
-    record : LiquidRecord or PairRecord
-        The record.
-
-    Returns
-    -------
-    list of str
-        Unknown sources, missing published files, missing components, undeserved grades.
-    """
-    found = []
-    sources = store.stems("sources")
-    for where, key in source_keys(record):
-        if key not in sources:
-            near = nearest(key, sources, 1)
-            guess = f"; did you mean '{near[0]}'?" if near else ""
-            found.append(f"{where}: there is no data/sources/{key}.toml{guess}")
-    if isinstance(record, PairRecord):
-        for key in record.components:
-            if key not in store.stems("liquids"):
-                found.append(f"components: there is no data/liquids/{key}.toml")
-    for blocks in record.properties.values():
-        for block in blocks:
-            found.extend(grade_problems(block))
-            for name in block.points:
-                if not os.path.isfile(os.path.join(store.root, "published", f"{name}.csv")):
-                    found.append(f"{block.label}: there is no data/published/{name}.csv")
-    return list(dict.fromkeys(found))
 
 
 class _Run:
@@ -203,7 +105,8 @@ class _Run:
         except RecordError as error:
             self.bad.append(str(error))
             return
-        self.bad.extend(f"data/{folder}/{text.removeprefix(f'{folder}/')}" for text in found)
+        subject = f"{folder}/{stem}: "
+        self.bad.extend(f"data/{name}: {text.removeprefix(subject)}" for text in found)
         if found:
             return
         seal = seal_of(data)

@@ -95,7 +95,7 @@ def _suggestions(name: str, folded: str) -> list[str]:
         for key, entry in entries.items()
         if fold(entry["formula"]) == folded and folded
     }
-    owners = {}
+    owners: dict[str, str] = {}
     for key, entry in entries.items():
         for known in (entry["name"], *entry["synonyms"]):
             owners.setdefault(known, key)
