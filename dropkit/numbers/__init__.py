@@ -2,7 +2,7 @@
 
 The length scale stands in the name or the docstring of each: ``length`` is the diameter of a jet,
 drop or nozzle; forms on the radius are functions of their own with an argument ``radius``.
-`catalogue` lists them all, `numbers_sheet` forms all that a liquid and a size allow.
+`overview` lists them all, `numbers_sheet` forms all that a liquid and a size allow.
 """
 
 from __future__ import annotations
@@ -15,6 +15,9 @@ if TYPE_CHECKING:
     from dropkit.numbers.capillarity import gas_weber_radius as gas_weber_radius
     from dropkit.numbers.capillarity import weber as weber
     from dropkit.numbers.capillarity import weber_radius as weber_radius
+    from dropkit.numbers.catalogue import Entry as Entry
+    from dropkit.numbers.catalogue import entries as entries
+    from dropkit.numbers.catalogue import overview as overview
     from dropkit.numbers.diffusion import fourier as fourier
     from dropkit.numbers.diffusion import fourier_mass as fourier_mass
     from dropkit.numbers.diffusion import lewis as lewis
@@ -48,9 +51,6 @@ if TYPE_CHECKING:
     from dropkit.numbers.inertia import strouhal as strouhal
     from dropkit.numbers.limits import Limit as Limit
     from dropkit.numbers.limits import limits_of as limits_of
-    from dropkit.numbers.listing import Entry as Entry
-    from dropkit.numbers.listing import catalogue as catalogue
-    from dropkit.numbers.listing import entries as entries
     from dropkit.numbers.particles import knudsen as knudsen
     from dropkit.numbers.particles import stokes as stokes
     from dropkit.numbers.scale_lengths import capillary_length as capillary_length
@@ -75,8 +75,8 @@ if TYPE_CHECKING:
     )
     from dropkit.numbers.scale_times import viscous_time as viscous_time
     from dropkit.numbers.scale_times import viscous_time_radius as viscous_time_radius
-    from dropkit.numbers.sheet import NumbersSheet as NumbersSheet
     from dropkit.numbers.sheet import numbers_sheet as numbers_sheet
+    from dropkit.numbers.sheet_rows import NumbersSheet as NumbersSheet
     from dropkit.numbers.surface_gradients import marangoni as marangoni
     from dropkit.numbers.surface_gradients import marangoni_mass as marangoni_mass
     from dropkit.numbers.transfer import biot as biot
@@ -95,13 +95,18 @@ if TYPE_CHECKING:
     from dropkit.numbers.waves import reduced_wavenumber as reduced_wavenumber
     from dropkit.numbers.waves import wavelength_ratio as wavelength_ratio
 
-# Module -> the public names that it holds; tests/numbers/test_listing.py compares it with the folder.
-_HOMES: Final[dict[str, tuple[str, ...]]] = {
+# File -> the public names in it; a test compares them with what the files hold.
+_THEMES: Final[dict[str, tuple[str, ...]]] = {
     "capillarity": (
         "gas_weber",
         "gas_weber_radius",
         "weber",
         "weber_radius",
+    ),
+    "catalogue": (
+        "Entry",
+        "entries",
+        "overview",
     ),
     "diffusion": (
         "fourier",
@@ -148,11 +153,6 @@ _HOMES: Final[dict[str, tuple[str, ...]]] = {
         "Limit",
         "limits_of",
     ),
-    "listing": (
-        "Entry",
-        "catalogue",
-        "entries",
-    ),
     "particles": (
         "knudsen",
         "stokes",
@@ -175,10 +175,8 @@ _HOMES: Final[dict[str, tuple[str, ...]]] = {
         "viscous_time",
         "viscous_time_radius",
     ),
-    "sheet": (
-        "NumbersSheet",
-        "numbers_sheet",
-    ),
+    "sheet": ("numbers_sheet",),
+    "sheet_rows": ("NumbersSheet",),
     "surface_gradients": (
         "marangoni",
         "marangoni_mass",
@@ -205,15 +203,18 @@ _HOMES: Final[dict[str, tuple[str, ...]]] = {
         "wavelength_ratio",
     ),
 }
-_MODULE_OF: Final = {name: module for module, names in _HOMES.items() for name in names}
+_HOMES: Final[dict[str, str | None]] = {
+    name: f"dropkit.numbers.{theme}" for theme, names in _THEMES.items() for name in names
+}
 
-__all__ = sorted(_MODULE_OF)
+__all__ = sorted(_HOMES)
 
 
 def __getattr__(name: str) -> Any:
-    if name not in _MODULE_OF:
+    home = _HOMES.get(name)
+    if home is None:
         raise AttributeError(f"module 'dropkit.numbers' has no attribute {name!r}")
-    value = getattr(importlib.import_module(f"dropkit.numbers.{_MODULE_OF[name]}"), name)
+    value = getattr(importlib.import_module(home), name)
     globals()[name] = value
     return value
 

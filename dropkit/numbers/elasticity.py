@@ -48,7 +48,8 @@ def deborah(density: float, surface_tension: float, relaxation_time: float, radi
     >>> round(numbers.deborah(1000.0, "60 mN/m", "1 ms", "50 um"), 3)
     21.909
     """
-    return relaxation_time / (density * radius * radius * radius / surface_tension) ** 0.5
+    number: float = relaxation_time / (density * radius * radius * radius / surface_tension) ** 0.5
+    return number
 
 
 @physical(returns="ratio", relaxation_time="time >= 0")

@@ -151,7 +151,10 @@ def rayleigh_charge_ratio(surface_tension: float, length: float, charge: float) 
     >>> round(numbers.rayleigh_charge_ratio(0.0728, "100 um", "7.134029827 pC"), 9)
     1.0
     """
-    return charge / (math.pi * (8.0 * _EPS0 * surface_tension * length * length * length) ** 0.5)
+    number: float = charge / (
+        math.pi * (8.0 * _EPS0 * surface_tension * length * length * length) ** 0.5
+    )
+    return number
 
 
 @physical(returns="ratio")
@@ -248,4 +251,5 @@ def taylor_field_ratio(surface_tension: float, length: float, electric_field: fl
     >>> round(numbers.taylor_field_ratio("72.8 mN/m", "2 mm", "1 MV/m"), 4)
     0.7608
     """
-    return electric_field * (_EPS0 * 0.5 * length / surface_tension) ** 0.5 / _TAYLOR
+    number: float = electric_field * (_EPS0 * 0.5 * length / surface_tension) ** 0.5 / _TAYLOR
+    return number

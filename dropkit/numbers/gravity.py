@@ -146,7 +146,8 @@ def bond_root(
     >>> round(numbers.bond_root(998.2, "72.7 mN/m", "2 mm"), 4)
     0.5189
     """
-    return (density * gravity * length * length / (2.0 * surface_tension)) ** 0.5
+    number: float = (density * gravity * length * length / (2.0 * surface_tension)) ** 0.5
+    return number
 
 
 @physical(returns="ratio", gas_density="density >= 0", gravity="acceleration >= 0")
@@ -198,7 +199,8 @@ def morton(
     """
     return (
         gravity
-        * viscosity**4
+        * (viscosity * viscosity)
+        * (viscosity * viscosity)
         * (density - gas_density)
         / (density * density * surface_tension * surface_tension * surface_tension)
     )

@@ -48,4 +48,5 @@ def splash_parameter(
     12.35860286
     """
     inertia = density * velocity * length
-    return (inertia * velocity / surface_tension) ** 0.5 * (inertia / viscosity) ** 0.25
+    number: float = (inertia * velocity / surface_tension) ** 0.5 * (inertia / viscosity) ** 0.25
+    return number

@@ -183,7 +183,8 @@ def froude(velocity: float, length: float, gravity: float = 9.80665) -> float:
     >>> round(numbers.froude(1.83, 2.0, gravity=1.63), 6)
     1.013543
     """
-    return velocity / (gravity * length) ** 0.5
+    number: float = velocity / (gravity * length) ** 0.5
+    return number
 
 
 @physical(returns="ratio", velocity="velocity > 0")
@@ -312,4 +313,7 @@ def discharge_coefficient(
     >>> round(numbers.discharge_coefficient(998.0, "1.2 L/min", "1.5 mm", "2 bar"), 4)
     0.5653
     """
-    return flow / (0.25 * math.pi * length * length * (2.0 * pressure_drop / density) ** 0.5)
+    number: float = flow / (
+        0.25 * math.pi * length * length * (2.0 * pressure_drop / density) ** 0.5
+    )
+    return number

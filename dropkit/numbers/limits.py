@@ -288,14 +288,14 @@ def limits_of(number: str) -> tuple[Limit, ...]:
     """
     found = tuple(limit for limit in LIMITS if limit.number == number)
     if not found:
-        # Imported here: the listing imports this module.
-        from dropkit.numbers.listing import entries
+        # Imported here: the catalogue imports this module.
+        from dropkit.numbers.catalogue import entries
 
         names = [entry.name for entry in entries()]
         if number not in names:
             raise UnknownName(
                 f"no number is called {number!r}",
                 choices=nearest(str(number), names),
-                hint="dropkit.numbers.catalogue() lists them all",
+                hint="dropkit.numbers.overview() lists them all",
             )
     return found

@@ -55,7 +55,8 @@ def capillary_length(density: float, surface_tension: float, gravity: float = 9.
     >>> round(numbers.capillary_length(998.2, 0.0727), 6)
     0.002725
     """
-    return (surface_tension / (density * gravity)) ** 0.5
+    scale: float = (surface_tension / (density * gravity)) ** 0.5
+    return scale
 
 
 @physical(returns="length")
@@ -137,7 +138,8 @@ def viscous_length(density: float, viscosity: float, time: float) -> float:
     >>> round(numbers.viscous_length(1000.0, 1e-3, 1e-6), 12)
     1e-06
     """
-    return (viscosity * time / density) ** 0.5
+    scale: float = (viscosity * time / density) ** 0.5
+    return scale
 
 
 @physical(returns="length", time="time >= 0")
@@ -179,7 +181,8 @@ def inertio_capillary_length(density: float, surface_tension: float, time: float
     >>> round(numbers.inertio_capillary_length(1000.0, 0.064, 1e-6) * 1e6, 6)
     4.0
     """
-    return (surface_tension * time * time / density) ** (1.0 / 3.0)
+    scale: float = (surface_tension * time * time / density) ** (1.0 / 3.0)
+    return scale
 
 
 @physical(returns="velocity")
@@ -256,7 +259,8 @@ def inertio_capillary_velocity(density: float, surface_tension: float, length: f
     >>> round(numbers.inertio_capillary_velocity(1000.0, 0.030, 30e-6), 9)
     1.0
     """
-    return (surface_tension / (density * length)) ** 0.5
+    scale: float = (surface_tension / (density * length)) ** 0.5
+    return scale
 
 
 @physical(returns="velocity")
@@ -300,4 +304,5 @@ def inertio_capillary_velocity_radius(
     >>> round(numbers.inertio_capillary_velocity_radius(998.2, 0.07275, 10e-6), 4)
     2.6997
     """
-    return (surface_tension / (density * radius)) ** 0.5
+    scale: float = (surface_tension / (density * radius)) ** 0.5
+    return scale

@@ -54,7 +54,8 @@ def capillary_time(density: float, surface_tension: float, gravity: float = 9.80
     >>> round(numbers.capillary_time(998.2, 0.0727), 5)
     0.01667
     """
-    return (surface_tension / (density * gravity * gravity * gravity)) ** 0.25
+    scale: float = (surface_tension / (density * gravity * gravity * gravity)) ** 0.25
+    return scale
 
 
 @physical(returns="time")
@@ -179,7 +180,8 @@ def inertio_capillary_time(density: float, surface_tension: float, length: float
     >>> round(numbers.inertio_capillary_time(1000.0, 0.064, 40e-6) * 1e6, 3)
     31.623
     """
-    return (density * length * length * length / surface_tension) ** 0.5
+    scale: float = (density * length * length * length / surface_tension) ** 0.5
+    return scale
 
 
 @physical(returns="time")
@@ -222,7 +224,8 @@ def inertio_capillary_time_radius(density: float, surface_tension: float, radius
     >>> round(numbers.inertio_capillary_time_radius(998.2, 0.07275, 1e-3) * 1e3, 4)
     3.7042
     """
-    return (density * radius * radius * radius / surface_tension) ** 0.5
+    scale: float = (density * radius * radius * radius / surface_tension) ** 0.5
+    return scale
 
 
 @physical(returns="time")

@@ -52,7 +52,8 @@ def ohnesorge(density: float, viscosity: float, surface_tension: float, length: 
     >>> round(numbers.ohnesorge(1000.0, "10 mPa*s", "30 mN/m", "25 um"), 10)
     0.3651483717
     """
-    return viscosity / (density * surface_tension * length) ** 0.5
+    number: float = viscosity / (density * surface_tension * length) ** 0.5
+    return number
 
 
 @physical(returns="ratio")
@@ -98,7 +99,8 @@ def ohnesorge_radius(
     >>> round(numbers.ohnesorge_radius(1000.0, "10 mPa*s", "30 mN/m", "12.5 um"), 6)
     0.516398
     """
-    return viscosity / (density * surface_tension * radius) ** 0.5
+    number: float = viscosity / (density * surface_tension * radius) ** 0.5
+    return number
 
 
 @physical(returns="ratio")
@@ -145,7 +147,8 @@ def z_number(density: float, viscosity: float, surface_tension: float, length: f
     >>> round(numbers.z_number(1000.0, "10 mPa*s", "30 mN/m", "25 um"), 9)
     2.738612788
     """
-    return (density * surface_tension * length) ** 0.5 / viscosity
+    number: float = (density * surface_tension * length) ** 0.5 / viscosity
+    return number
 
 
 @physical(returns="ratio")

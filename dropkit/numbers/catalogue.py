@@ -17,12 +17,14 @@ from dropkit.numbers.limits import LIMITS, Limit
 if TYPE_CHECKING:
     import pandas as pd
 
-__all__ = ["Entry", "catalogue", "entries"]
+__all__ = ["Entry", "entries", "overview"]
 
 # First line of a docstring: "Weber number We: inertia of the liquid against surface tension."
 _TITLE: Final = re.compile(r"(?P<title>.+?) (?P<symbol>\S+): (?P<compares>.+)\.")
 # A parameter and the first sentence of its text, up to the unit.
-_PARAMETER: Final = re.compile(r"^ {4}(?P<name>\w+) : [^\n]+\n {8}(?P<text>.+?)(?: \[|\.\n)", re.M | re.S)
+_PARAMETER: Final = re.compile(
+    r"^ {4}(?P<name>\w+) : [^\n]+\n {8}(?P<text>.+?)(?: \[|\.\n)", re.M | re.S
+)
 # Arguments that say which size a number is built on, in the order of preference.
 _SIZES: Final = ("length", "radius")
 
@@ -62,13 +64,13 @@ class Entry:
     limits: tuple[Limit, ...]
 
     @property
-    def function(self) -> Boundary[Any]:
+    def function(self) -> Boundary[..., Any]:
         """The number itself."""
-        found: Boundary[Any] = getattr(dropkit.numbers, self.name)
+        found: Boundary[..., Any] = getattr(dropkit.numbers, self.name)
         return found
 
 
-def _entry(name: str, theme: str, number: Boundary[Any]) -> Entry:
+def _entry(name: str, theme: str, number: Boundary[..., Any]) -> Entry:
     # Under python -OO there are no docstrings: names and arguments remain.
     doc = number.__doc__ or ""
     title = _TITLE.match(doc)
@@ -102,7 +104,7 @@ def entries() -> tuple[Entry, ...]:
     >>> [entry.symbol for entry in entries() if entry.name == "ohnesorge"]
     ['Oh']
     """
-    found = []
+    found: list[Entry] = []
     for module_info in pkgutil.iter_modules(dropkit.numbers.__path__):
         module = importlib.import_module(f"dropkit.numbers.{module_info.name}")
         found.extend(
@@ -113,7 +115,7 @@ def entries() -> tuple[Entry, ...]:
     return tuple(found)
 
 
-def catalogue() -> pd.DataFrame:
+def overview() -> pd.DataFrame:
     """All numbers and scales as a table: what each compares, its arguments, length and limits.
 
     Returns
@@ -128,7 +130,7 @@ def catalogue() -> pd.DataFrame:
     Examples
     --------
     >>> from dropkit import numbers
-    >>> numbers.catalogue().loc["weber_radius", "scale"]
+    >>> numbers.overview().loc["weber_radius", "scale"]
     'Radius of the jet, drop or nozzle'
     """
     import pandas as pd
