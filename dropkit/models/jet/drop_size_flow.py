@@ -13,7 +13,7 @@ __all__ = ["drop_diameter_from_flow", "flow_from_drop", "frequency_from_drop"]
 MODEL: Final = Published(
     gives="diameter of drops made one per period",
     holds="a jet that breaks up once per period, without satellites that stay apart",
-    sources=("BerglundLiu1973",),
+    sources=(),
     mark="C",
     place="D = (6 Q/(pi f))^(1/3)",
     agreement="conservation of volume; exact where the drive rules the breakup",
@@ -46,11 +46,6 @@ def drop_diameter_from_flow(flow: float, frequency: float) -> float:
     Notes
     -----
     ``D = (6 Q/(pi f))^(1/3)`` [C]: conservation of volume.
-
-    References
-    ----------
-    R. N. Berglund, B. Y. H. Liu, Environ. Sci. Technol. 7 (1973) 147,
-    doi:10.1021/es60074a001, is the usual reference for drops made so.
 
     Examples
     --------

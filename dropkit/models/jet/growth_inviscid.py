@@ -7,7 +7,7 @@ from typing import Any, Final
 
 from dropkit.boundary import physical
 from dropkit.models.jet._series import bessel_ratio
-from dropkit.models.published import Published, blank_outside, modelled, outside_mask
+from dropkit.models.published import Published, blank_outside, outside_mask
 from dropkit.validity import Outside, Range
 
 __all__ = [
@@ -38,7 +38,7 @@ MODEL: Final = Published(
 )
 
 
-@modelled(returns="growth_rate")
+@physical(returns="growth_rate")
 def growth_rate_inviscid(
     density: float,
     surface_tension: float,
@@ -91,7 +91,7 @@ def growth_rate_inviscid(
     --------
     >>> from dropkit.models import jet
     >>> round(jet.growth_rate_inviscid(998.2, 0.0727, 60e-6, 270e-6))
-    17830
+    17832
     >>> jet.growth_rate_inviscid("998.2 kg/m3", "72.7 mN/m", "60 um", "150 um", outside="nan")
     <Quantity(nan, '1 / second')>
     """
@@ -181,7 +181,7 @@ def maximum_growth_inviscid(density: float, surface_tension: float, jet_diameter
     --------
     >>> from dropkit.models import jet
     >>> round(jet.maximum_growth_inviscid(998.2, 0.0727, 60e-6))
-    17830
+    17832
     """
     radius = 0.5 * jet_diameter
     scale: Any = surface_tension / (density * radius**3)

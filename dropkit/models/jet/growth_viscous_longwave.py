@@ -6,7 +6,7 @@ import math
 from typing import Any, Final
 
 from dropkit.boundary import physical
-from dropkit.models.published import Published, blank_outside, modelled, outside_mask
+from dropkit.models.published import Published, blank_outside, outside_mask
 from dropkit.validity import Outside, Range
 
 __all__ = [
@@ -31,7 +31,7 @@ MODEL: Final = Published(
 )
 
 
-@modelled(returns="growth_rate")
+@physical(returns="growth_rate")
 def growth_rate_viscous_longwave(
     density: float,
     viscosity: float,
@@ -89,7 +89,7 @@ def growth_rate_viscous_longwave(
     --------
     >>> from dropkit.models import jet
     >>> round(jet.growth_rate_viscous_longwave(1100.0, 0.010, 0.065, 60e-6, 300e-6))
-    11054
+    11259
     """
     x: Any = math.pi * jet_diameter / wavelength
     mask = outside_mask("growth_rate_viscous_longwave", outside, (x, GROWING))
@@ -198,7 +198,7 @@ def maximum_growth_viscous_longwave(
     --------
     >>> from dropkit.models import jet
     >>> round(jet.maximum_growth_viscous_longwave(1100.0, 0.010, 0.065, 60e-6))
-    11268
+    11344
     """
     ohnesorge: Any = viscosity / (density * surface_tension * jet_diameter) ** 0.5
     scale: Any = surface_tension / (density * jet_diameter**3)

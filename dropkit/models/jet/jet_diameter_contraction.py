@@ -5,7 +5,8 @@ from __future__ import annotations
 import math
 from typing import Final
 
-from dropkit.models.published import Published, blank_outside, modelled, outside_mask
+from dropkit.boundary import physical
+from dropkit.models.published import Published, blank_outside, outside_mask
 from dropkit.validity import Outside, Range
 
 __all__ = ["jet_diameter_laminar_pipe", "jet_diameter_turbulent_pipe"]
@@ -30,7 +31,7 @@ MODEL: Final = Published(
 )
 
 
-@modelled(returns="length", velocity="velocity > 0")
+@physical(returns="length", velocity="velocity > 0")
 def jet_diameter_laminar_pipe(
     density: float,
     viscosity: float,
@@ -93,7 +94,7 @@ def jet_diameter_laminar_pipe(
     return result
 
 
-@modelled(returns="length", velocity="velocity > 0")
+@physical(returns="length", velocity="velocity > 0")
 def jet_diameter_turbulent_pipe(
     density: float,
     viscosity: float,
