@@ -1,7 +1,7 @@
 """`physical`: an SI core becomes a function that takes any form of input.
 
-The core is plain arithmetic on SI floats or arrays; the `Boundary` around it reads the
-input, checks dimension and domain, and gives the result back in a unit if any argument
+The core is plain arithmetic on SI floats or arrays. The `Boundary` around it reads the
+input, checks dimensions and domains, and gives the result back in a unit if any argument
 had one. The core stays reachable as ``.si``.
 """
 
@@ -17,8 +17,8 @@ from typing import Any, Final, Generic, ParamSpec, Protocol, TypeAlias, TypeVar,
 import numpy as np
 
 from dropkit.errors import BadInput, DropkitError, DropkitWarning
-from dropkit.unit_table import NOMENCLATURE, Kind
-from dropkit.units import Asked, give, kind_of, read
+from dropkit.unit_table import NOMENCLATURE, Kind, kind_of
+from dropkit.units import Asked, give, read
 from dropkit.validity import Domain
 
 __all__ = ["Boundary", "physical"]
@@ -29,17 +29,18 @@ R_co = TypeVar("R_co", covariant=True)
 
 Returns: TypeAlias = str | tuple[str, ...] | Mapping[str, str] | None
 
-# Open bounds for the fast check: low < value < high; NaN and the ends go the long way.
-_BOUNDS: Final[dict[str, tuple[float, float]]] = {
-    "> 0": (0.0, math.inf),
-    ">= 0": (-5e-324, math.inf),
-    "0..1": (-5e-324, math.nextafter(1.0, 2.0)),
-    "any": (-math.inf, math.inf),
+# What a float must satisfy to skip the long way; NaN and the ends of a domain do not.
+_QUICK: Final[dict[str, str]] = {
+    "> 0": "0.0 < {0} < inf",
+    ">= 0": "0.0 <= {0} < inf",
+    "0..1": "0.0 <= {0} <= 1.0",
+    "any": "-inf < {0} < inf",
 }
+_FAILED: Final = object()  # a result that arithmetic could not give
 
 
-class _Core(Protocol[P, R_co]):
-    """The core: its own types for floats, Any for arrays."""
+class Core(Protocol[P, R_co]):
+    """An SI core: its own result for floats, Any for arrays."""
 
     @overload
     def __call__(self, *args: P.args, **kwargs: P.kwargs) -> R_co: ...
@@ -48,7 +49,9 @@ class _Core(Protocol[P, R_co]):
 
 
 class Boundary(Generic[P, R]):
-    """A public function: reads any form of input, calls its SI core, gives the result back.
+    """A public function: reads any form of input, runs its SI core, gives the result back.
+
+    Made by `physical`. It keeps the core's name, help and signature and pickles by reference.
 
     Parameters
     ----------
@@ -56,17 +59,17 @@ class Boundary(Generic[P, R]):
         The function of SI floats or arrays.
     returns : str, tuple, mapping or None
         Kind of the result, of each of several results, or None for no quantity.
-    overrides : mapping
+    overrides : mapping, optional
         Kinds of arguments that differ from the nomenclature; None marks an option.
 
     Attributes
     ----------
     si : callable
-        The core itself.
-    kinds : dict
-        Argument -> (kind name, domain).
+        The core: bare arithmetic, unchecked.
+    kinds, domains : dict of str
+        Name of the kind and domain of each physical argument.
     returns : str, tuple, dict or None
-        Kind names of the result.
+        Name of the kind of the result.
 
     Raises
     ------
@@ -74,8 +77,9 @@ class Boundary(Generic[P, R]):
         If an argument has no kind, or a kind is declared for no argument.
     """
 
-    si: _Core[P, R]
-    kinds: dict[str, tuple[str, Domain]]
+    si: Core[P, R]
+    kinds: dict[str, str]
+    domains: dict[str, Domain]
     returns: Any
     __name__: str
     __qualname__: str
@@ -88,192 +92,26 @@ class Boundary(Generic[P, R]):
         overrides: Mapping[str, str | None] | None = None,
     ) -> None:
         functools.update_wrapper(self, core)
-        self._core: Callable[..., Any] = core
-        self.si = core
         signature = inspect.signature(core)
         declared = _declared(core, signature, dict(overrides or {}))
-        self.kinds = {word: (kind.name, domain) for word, (kind, domain) in declared.items()}
-        self._declared = declared
-        self._parameters = tuple(signature.parameters)
-        self._positional = tuple(
-            word
-            for word, parameter in signature.parameters.items()
-            if parameter.kind is not parameter.KEYWORD_ONLY
-        )
-        self._optional = frozenset(
-            word
-            for word, parameter in signature.parameters.items()
-            if parameter.default is None
-        )
-        self._signature = signature
-        self._bounds = tuple(
-            _BOUNDS[declared[word][1]] if word in declared else (math.nan, math.nan)
-            for word in self._positional
-        )
+        self.si = core
+        self.kinds = {word: kind.name for word, (kind, _) in declared.items()}
+        self.domains = {word: domain for word, (_, domain) in declared.items()}
         self._results, self.returns = _results(core, returns)
-        self._single = isinstance(self._results, Kind)
+        self._reads = tuple(
+            (word, kind, domain, signature.parameters[word].default is None)
+            for word, (kind, domain) in declared.items()
+        )
+        self._core: Callable[..., Any] = core
+        self._signature = signature
+        self._quick = _quick(self, core, signature, isinstance(self._results, Kind))
 
     @overload
     def __call__(self, *args: P.args, **kwargs: P.kwargs) -> R: ...
     @overload
     def __call__(self, *args: Any, **kwargs: Any) -> Any: ...
     def __call__(self, *args: Any, **kwargs: Any) -> Any:
-        # Bare floats by position, the common case of tools, need no more than comparisons.
-        if not kwargs and self._single and len(args) <= len(self._bounds):
-            for value, (low, high) in zip(args, self._bounds, strict=False):
-                if type(value) is not float or not low < value < high:
-                    break
-            else:
-                try:
-                    result = self._core(*args)
-                except (ArithmeticError, ValueError, TypeError):
-                    pass  # the long way says what was wrong
-                else:
-                    if type(result) is float and -math.inf < result < math.inf:
-                        return result
-        return self._long(args, kwargs)
-
-    def _long(self, args: tuple[Any, ...], kwargs: dict[str, Any]) -> Any:
-        given = dict(zip(self._positional, args, strict=False))
-        if len(args) > len(self._positional) or not given.keys().isdisjoint(kwargs):
-            self._signature.bind(*args, **kwargs)  # raises Python's own TypeError
-        given.update(kwargs)
-        asked: Asked | None = None
-        series = None
-        shapes: dict[str, tuple[int, ...]] = {}
-        finite = True
-        for word, value in given.items():
-            if word not in self._declared or (value is None and word in self._optional):
-                continue
-            kind, domain = self._declared[word]
-            si, its = read(value, kind, word, domain=domain)
-            if its is not None and (asked is None or asked.registry is None):
-                asked = its
-            if type(si) is float:
-                finite = finite and math.isfinite(si)
-            else:
-                if not isinstance(si, np.ndarray):
-                    series = self._same_index(series, word, si)
-                    si = si.to_numpy()
-                shapes[word] = si.shape
-            given[word] = si
-        shape = self._shape(shapes, series) if shapes else None
-        result = self._run(given, shape is not None)
-        return self._deliver(result, given, shape, series, asked, finite)
-
-    def _same_index(self, series: Any, word: str, value: Any) -> Any:
-        if series is not None and not series.index.equals(value.index):
-            raise BadInput(
-                f"{self.__name__}: the index of {word} differs from that of the Series before it",
-                hint="Align them first, or pass numpy arrays",
-            )
-        return value if series is None else series
-
-    def _shape(self, shapes: dict[str, tuple[int, ...]], series: Any) -> tuple[int, ...]:
-        try:
-            shape = np.broadcast_shapes(*shapes.values())
-        except ValueError:
-            shape = (-1,)
-        if shape == (-1,) or (series is not None and shape != series.shape):
-            listed = ", ".join(f"{word} {form}" for word, form in shapes.items())
-            raise BadInput(
-                f"{self.__name__}: the shapes do not broadcast: {listed}",
-                allowed="equal shapes, or lengths of 1 by numpy's rules",
-                hint="For every combination insert an axis, such as velocity[:, None]",
-            )
-        return shape
-
-    def _run(self, given: dict[str, Any], arrays: bool) -> Any:
-        try:
-            if arrays:
-                with np.errstate(all="ignore"):
-                    return self._core(**given)
-            return self._core(**given)
-        except DropkitError:
-            raise
-        except ArithmeticError:
-            return None if self.returns is None else _Failed
-        except ValueError as error:
-            if "math domain" in str(error) or "nonnegative" in str(error):
-                return None if self.returns is None else _Failed
-            raise
-        except TypeError:
-            self._signature.bind(**given)  # a missing or unknown argument, in Python's words
-            raise
-
-    def _deliver(
-        self,
-        result: Any,
-        given: dict[str, Any],
-        shape: tuple[int, ...] | None,
-        series: Any,
-        asked: Asked | None,
-        finite: bool,
-    ) -> Any:
-        kinds = self._results
-        if kinds is None:
-            return result
-        bad = 0
-
-        def one(value: Any, kind: Kind | None) -> Any:
-            nonlocal bad
-            if kind is None:
-                return value
-            si, wrong = self._settle(value, given, shape, finite)
-            bad += wrong
-            if series is not None:
-                si = type(series)(si, index=series.index)
-            return give(si, kind, asked)
-
-        if isinstance(kinds, tuple):
-            values = [result] * len(kinds) if result is _Failed else result
-            parts = [one(value, kind) for value, kind in zip(values, kinds, strict=True)]
-            make = getattr(type(result), "_make", tuple)
-            ready: Any = make(parts)
-        elif isinstance(kinds, dict):
-            found = dict.fromkeys(kinds, result) if result is _Failed else result
-            ready = {key: one(value, kinds.get(key)) for key, value in found.items()}
-        else:
-            ready = one(result, kinds)
-        if bad:
-            warnings.warn(
-                f"{self.__name__}: {bad} result(s) could not be computed as a finite number "
-                "and became NaN",
-                DropkitWarning,
-                stacklevel=4,
-            )
-        return ready
-
-    def _settle(
-        self,
-        value: Any,
-        given: dict[str, Any],
-        shape: tuple[int, ...] | None,
-        finite: bool,
-    ) -> tuple[Any, int]:
-        """A float or full-shaped float64 array, non-finite elements as NaN, and their count."""
-        if shape is None:
-            if value is _Failed or isinstance(value, complex):
-                return math.nan, int(finite)
-            number = float(value)
-            if math.isfinite(number):
-                return number, 0
-            return math.nan, int(finite)
-        if value is _Failed or np.iscomplexobj(value):
-            value = np.full(shape, np.nan)
-        array = np.asarray(value, dtype=np.float64)
-        if array.shape != shape:
-            array = np.broadcast_to(array, shape).copy()
-        elif any(array is one for one in given.values()):
-            array = array.copy()
-        good = np.isfinite(array)
-        if good.all():
-            return array, 0
-        inputs = np.ones((), dtype=bool)
-        for word in self._declared:
-            if isinstance(given.get(word), (float, np.ndarray)):
-                inputs = inputs & np.isfinite(given[word])
-        return np.where(good, array, np.nan), int(np.count_nonzero(~good & inputs))
+        return self._quick(*args, **kwargs)
 
     def __reduce__(self) -> str:
         return self.__qualname__
@@ -281,12 +119,194 @@ class Boundary(Generic[P, R]):
     def __repr__(self) -> str:
         return f"<dropkit function {self.__module__}.{self.__qualname__}{self._signature}>"
 
+    def _long(self, given: dict[str, Any]) -> Any:
+        """The call with everything that may come in; `given` holds every argument."""
+        asked: Asked | None = None
+        series = None
+        shapes: dict[str, tuple[int, ...]] = {}
+        finite = True
+        for word, kind, domain, optional in self._reads:
+            value = given[word]
+            if value is None and optional:
+                continue
+            si, its = read(value, kind, word, domain=domain)
+            if its is not None and (asked is None or asked.registry is None):
+                asked = its
+            if type(si) is float:
+                finite = finite and math.isfinite(si)
+            else:
+                if not isinstance(si, np.ndarray):
+                    if series is not None and not series.index.equals(si.index):
+                        raise self._error(
+                            f"the index of {word} differs from that of the Series before it",
+                            hint="Align them first, or pass numpy arrays",
+                        )
+                    series = si
+                    si = si.to_numpy()
+                shapes[word] = si.shape
+            given[word] = si
+        shape = self._shape(shapes, series) if shapes else None
+        result = self._run(given, shape is not None)
+        if self._results is None:
+            return result
+        deliver = _Delivery(self._reads, given, shape, series, asked, finite)
+        ready = deliver.all(result, self._results)
+        if deliver.bad:
+            warnings.warn(
+                f"{self.__name__}: {deliver.bad} result(s) had no finite value and became NaN",
+                DropkitWarning,
+                stacklevel=4,
+            )
+        return ready
 
-class _FailedType:
-    """Stands for a result that arithmetic could not give."""
+    def _error(self, what: str, *, allowed: str = "", hint: str = "") -> BadInput:
+        return BadInput(f"{self.__name__}: {what}", allowed=allowed, hint=hint)
+
+    def _shape(self, shapes: dict[str, tuple[int, ...]], series: Any) -> tuple[int, ...]:
+        """The common shape by numpy's rules; a Series fixes it."""
+        try:
+            shape = np.broadcast_shapes(*shapes.values())
+        except ValueError:
+            shape = None
+        if shape is None or (series is not None and shape != series.shape):
+            listed = ", ".join(f"{word} {form}" for word, form in shapes.items())
+            raise self._error(
+                f"the shapes do not broadcast: {listed}",
+                allowed="equal shapes, or lengths of 1 by numpy's rules",
+                hint="For every combination add an axis, such as velocity[:, None]",
+            )
+        return shape
+
+    def _run(self, given: dict[str, Any], arrays: bool) -> Any:
+        """The core's result; _FAILED where arithmetic gives none."""
+        try:
+            if not arrays:
+                return self._core(**given)
+            with np.errstate(all="ignore"):
+                return self._core(**given)
+        except DropkitError:
+            raise
+        except ArithmeticError:
+            return _FAILED
+        except ValueError as error:
+            # What `math` says outside the domain of a function, in 3.11 and in 3.14.
+            if "math domain" in str(error) or "expected a" in str(error):
+                return _FAILED
+            raise
 
 
-_Failed: Final = _FailedType()
+class _Delivery:
+    """Brings the results of one call into the form that was asked for; counts what failed."""
+
+    def __init__(
+        self,
+        reads: tuple[tuple[str, Kind, Domain, bool], ...],
+        given: dict[str, Any],
+        shape: tuple[int, ...] | None,
+        series: Any,
+        asked: Asked | None,
+        finite: bool,
+    ) -> None:
+        self.reads, self.given, self.shape = reads, given, shape
+        self.series, self.asked, self.finite = series, asked, finite
+        # Under outside="nan" a NaN is the answer that was asked for, not a failure.
+        self.nan_asked = given.get("outside") == "nan"
+        self.bad = 0
+
+    def all(self, result: Any, kinds: Any) -> Any:
+        """One result, or a tuple or dict of several, each by its kind."""
+        if isinstance(kinds, Kind):
+            return self.one(result, kinds)
+        if isinstance(kinds, tuple):
+            values = (_FAILED,) * len(kinds) if result is _FAILED else result
+            parts = [self.one(value, kind) for value, kind in zip(values, kinds, strict=True)]
+            make: Callable[[list[Any]], Any] = getattr(type(result), "_make", tuple)
+            return make(parts)
+        values = dict.fromkeys(kinds, _FAILED) if result is _FAILED else result
+        return {key: self.one(value, kinds[key]) for key, value in values.items()}
+
+    def one(self, value: Any, kind: Kind) -> Any:
+        """One result; non-finite elements become NaN."""
+        if self.shape is None:
+            return give(self.scalar(value), kind, self.asked)
+        array = self.array(value, self.shape)
+        if self.series is not None:
+            return type(self.series)(array, index=self.series.index)
+        return give(array, kind, self.asked)
+
+    def scalar(self, value: Any) -> float:
+        # A negative number to a broken power is complex in Python: no result here.
+        if value is not _FAILED and not isinstance(value, complex):
+            number = float(value)
+            if math.isfinite(number) or (self.nan_asked and math.isnan(number)):
+                return number
+        self.bad += self.finite
+        return math.nan
+
+    def array(self, value: Any, shape: tuple[int, ...]) -> Any:
+        if value is _FAILED or np.iscomplexobj(value):
+            value = np.inf  # becomes NaN below, and counts
+        result = np.asarray(value, dtype=np.float64)
+        if result.shape != shape:
+            result = np.broadcast_to(result, shape).copy()
+        elif any(result is one for one in self.given.values()):
+            result = result.copy()  # a result never shares memory with an input
+        good = np.isfinite(result)
+        if good.all():
+            return result
+        known = ~np.isnan(result) if self.nan_asked else np.ones(shape, dtype=bool)
+        for word, _, _, _ in self.reads:
+            if isinstance(self.given[word], (float, np.ndarray)):
+                known &= np.isfinite(self.given[word])
+        self.bad += int(np.count_nonzero(~good & known))
+        return np.where(good, result, np.nan)
+
+
+def _quick(
+    boundary: Boundary[..., Any],
+    core: Callable[..., Any],
+    signature: inspect.Signature,
+    single: bool,
+) -> Callable[..., Any]:
+    """The front door: binds arguments as Python does and lets plain floats straight through.
+
+    Written out per function, as `dataclasses` does it, because a loop over arguments
+    costs more than most cores.
+    """
+    head, call, tests = [], [], []
+    space: dict[str, Any] = {"_core": core, "_long": boundary._long, "inf": math.inf}
+    starred = False
+    for word, parameter in signature.parameters.items():
+        text = word
+        if parameter.kind is parameter.KEYWORD_ONLY and not starred:
+            head.append("*")
+            starred = True
+        if parameter.default is not parameter.empty:
+            space[f"_default_{word}"] = parameter.default
+            text = f"{word}=_default_{word}"
+        head.append(text)
+        call.append(f"{word}={word}" if starred else word)
+        if word in boundary.domains:
+            test = f"type({word}) is float and {_QUICK[boundary.domains[word]].format(word)}"
+            none = f"{word} is None or " if parameter.default is None else ""
+            tests.append(f"({none}{test})")
+    given = ", ".join(f"{word!r}: {word}" for word in signature.parameters)
+    lines = [f"def {core.__name__}({', '.join(head)}):"]
+    if single:
+        lines += [
+            f"    if {' and '.join(tests) or 'True'}:",
+            "        try:",
+            f"            _result = _core({', '.join(call)})",
+            "        except (ArithmeticError, ValueError):",
+            "            pass",
+            "        else:",
+            "            if type(_result) is float and -inf < _result < inf:",
+            "                return _result",
+        ]
+    lines.append(f"    return _long({{{given}}})")
+    exec(compile("\n".join(lines), f"<boundary of {core.__qualname__}>", "exec"), space)
+    found: Callable[..., Any] = space[core.__name__]
+    return found
 
 
 def _declared(
@@ -295,19 +315,18 @@ def _declared(
     """Kind and domain of each physical argument; TypeError where one is missing."""
     declared: dict[str, tuple[Kind, Domain]] = {}
     for word, parameter in signature.parameters.items():
-        if parameter.kind in (parameter.VAR_POSITIONAL, parameter.VAR_KEYWORD):
-            raise TypeError(f"{core.__qualname__}: *{word} cannot have a kind")
+        if parameter.kind not in (parameter.POSITIONAL_OR_KEYWORD, parameter.KEYWORD_ONLY):
+            raise TypeError(f"{core.__qualname__}: {parameter} cannot be called by name")
         text = overrides.pop(word, NOMENCLATURE.get(word, ""))
         if text is None:
             continue
         if not text:
             # Only keyword arguments that are no numbers may go without: they are options.
-            if parameter.kind is parameter.KEYWORD_ONLY and "float" not in str(
-                parameter.annotation
-            ):
+            number = "float" in str(parameter.annotation)
+            if parameter.kind is parameter.KEYWORD_ONLY and not number:
                 continue
             raise TypeError(
-                f"{core.__qualname__}: argument {word!r} has no kind; use a word of the "
+                f"{core.__qualname__}: the argument {word!r} has no kind; use a word of the "
                 f'nomenclature, or declare it: @physical(..., {word}="length > 0")'
             )
         try:
@@ -320,7 +339,7 @@ def _declared(
 
 
 def _results(core: Callable[..., Any], returns: Returns) -> tuple[Any, Any]:
-    """Kinds of the results and their names in the same form."""
+    """Kinds of the results, and their names, in the form of `returns`."""
     try:
         if returns is None:
             return None, None
@@ -359,6 +378,12 @@ def physical(
     TypeError
         At once, if an argument has no kind.
 
+    Notes
+    -----
+    Default values of the core are SI. Keyword-only arguments that are no numbers are options
+    and pass through untouched. A result that is not finite although every input was, and
+    every arithmetic error, becomes NaN with one warning. Results beside a Series are Series.
+
     Examples
     --------
     >>> @physical(returns="time")
@@ -368,6 +393,8 @@ def physical(
     0.05
     >>> print(travel_time("500 um", 10.0))
     50.0 microsecond
+    >>> travel_time.si(0.5, 10.0)
+    0.05
     """
 
     def wrap(core: Callable[P, R]) -> Boundary[P, R]:

@@ -109,7 +109,7 @@ class Trail:
 
     Parameters
     ----------
-    property : str
+    quantity : str
         What the value is.
     subject : str
         The liquid or mixture.
@@ -127,7 +127,7 @@ class Trail:
         Versions of dropkit, its data and any engine.
     """
 
-    property: str
+    quantity: str
     subject: str
     method: str
     grade: Grade
@@ -162,8 +162,10 @@ class Trail:
         return cls(**{**data, **tuples, "records": records})
 
     def __str__(self) -> str:
-        spread = "" if self.uncertainty is None else f", +-{2 * self.uncertainty:.2g} (95 %, relative)"
-        lines = [f"{self.property} of {self.subject}: {self.method} [{self.grade}{spread}]"]
+        spread = (
+            "" if self.uncertainty is None else f", +-{2 * self.uncertainty:.2g} (95 %, relative)"
+        )
+        lines = [f"{self.quantity} of {self.subject}: {self.method} [{self.grade}{spread}]"]
         for record in self.records:
             keys = ", ".join(record.sources)
             lines.append(

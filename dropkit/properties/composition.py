@@ -57,7 +57,9 @@ def reference_density(key: str, temperature: float = 293.15) -> float:
             hint="Give it by mass or by mole",
         )
     if "density" not in record.properties:
-        raise CompositionError(f"{record.name} has no density record, so volumes can't be converted")
+        raise CompositionError(
+            f"{record.name} has no density record, so volumes can't be converted"
+        )
     curve = Curve(record.properties["density"], inside_mixtures=True)
     if not curve.range.low <= temperature <= curve.range.high:
         raise CompositionError(
@@ -104,9 +106,7 @@ def check_basis(by: Any) -> str:
     """`by` if it is a basis; else an error that lists them."""
     if isinstance(by, str) and by in BASES:
         return by
-    raise CompositionError(
-        f"by={by!r} is no basis", allowed='by="mass", by="mole" or by="volume"'
-    )
+    raise CompositionError(f"by={by!r} is no basis", allowed='by="mass", by="mole" or by="volume"')
 
 
 def read_composition(
@@ -147,7 +147,9 @@ def read_composition(
     for position, key in enumerate(names):
         if key in names[:position]:
             raise CompositionError(f"{key} appears twice, under two of its names")
-    values, kinds, rest = [], set(), ""
+    values: list[Any] = []
+    kinds: set[str] = set()
+    rest = ""
     for key, value in zip(names, components.values(), strict=True):
         if isinstance(value, str) and value.strip().casefold() == "rest":
             if rest:
@@ -287,9 +289,7 @@ def _check_amounts(names: Sequence[str], values: Sequence[Any]) -> list[Any]:
     return list(values)
 
 
-def _complete(
-    names: Sequence[str], values: Sequence[Any], rest: str, normalise: bool
-) -> list[Any]:
+def _complete(names: Sequence[str], values: Sequence[Any], rest: str, normalise: bool) -> list[Any]:
     """Fractions that add up to one, with the rest filled in."""
     _check_each(names, values, "fraction")
     given = [value for value in values if value is not None]

@@ -8,26 +8,39 @@ from typing import TYPE_CHECKING, Any
 
 import numpy as np
 
-from dropkit.unit_table import KINDS
+from dropkit.unit_table import KINDS, NOMENCLATURE, Kind
 
 if TYPE_CHECKING:
     from dropkit.properties.interface import Fluid
 
-__all__ = ["fluid_html", "fluid_text", "html_table", "in_stock", "number", "text_table", "unit_of"]
+__all__ = [
+    "escape",
+    "fluid_html",
+    "fluid_text",
+    "html_table",
+    "in_stock",
+    "number",
+    "text_table",
+    "unit_of",
+]
 
 ROOM = 293.15
 
 
+def _kind(word: str) -> Kind:
+    return KINDS[NOMENCLATURE.get(word, word)]
+
+
 def unit_of(kind: str, *, with_units: bool = True) -> str:
     """The unit in which values of a kind are shown: the trade's, or SI."""
-    entry = KINDS[kind]
+    entry = _kind(kind)
     unit = entry.stock if with_units else entry.si
     return unit.replace("^", "") if unit not in ("", "1", "dimensionless") else "-"
 
 
 def in_stock(kind: str, value: Any) -> Any:
     """An SI value in the trade's unit of its kind (not for temperatures)."""
-    return value / KINDS[kind].per_stock
+    return value / _kind(kind).per_stock
 
 
 def number(value: Any, figures: int = 4) -> str:
@@ -65,7 +78,7 @@ _HEADER = ("property", "at 20 degC", "unit", "grade", "range")
 
 
 def _fluid_rows(fluid: Fluid) -> list[tuple[str, ...]]:
-    rows = []
+    rows: list[tuple[str, ...]] = []
     for prop in fluid.available():
         limits = fluid.range(prop)
         inside = limits.low <= ROOM <= limits.high

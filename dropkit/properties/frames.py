@@ -20,7 +20,13 @@ from dropkit.errors import (
 )
 from dropkit.properties import display
 from dropkit.properties.catalogue import resolve
-from dropkit.properties.composition import BASES, Composition, check_basis, read_composition, to_mass
+from dropkit.properties.composition import (
+    BASES,
+    Composition,
+    check_basis,
+    read_composition,
+    to_mass,
+)
 from dropkit.properties.curves import FloatArray
 from dropkit.properties.interface import GRADED, property_name
 from dropkit.properties.mixtures import Mixture
@@ -98,7 +104,7 @@ def lookup(
     size = len(frame)
     values = {prop: np.full(size, np.nan) for prop in wanted}
     grades: list[Grade | str] = [""] * size
-    reasons = list(table.reasons)
+    reasons = table.reasons
     for rows, fluid in table.groups():
         _fill_group(rows, fluid, table.temperature, wanted, outside, values, grades, reasons)
     result = frame.copy()
@@ -200,7 +206,7 @@ class _Table:
             kelvin = numbers
         else:
             self.with_units = True
-            kelvin = np.asarray(units.to_si((numbers, unit), "temperature", str(column.name)))
+            kelvin = np.asarray(units.to_si((numbers, unit), "temperature", str(column.name), domain="any"))
         for row in np.flatnonzero(kelvin <= 0.0):
             self.reasons[row] = "temperature at or below 0 K"
         self.temperature = np.where(kelvin > 0.0, kelvin, np.nan)
@@ -211,7 +217,9 @@ class _Table:
         if rest is not None:
             rest = resolve(rest)
             if rest in columns:
-                raise CompositionError(f"{rest} is the rest and has a column", allowed="one of both")
+                raise CompositionError(
+                    f"{rest} is the rest and has a column", allowed="one of both"
+                )
         shares, basis, amounts = _on_one_basis(columns, by)
         keys = list(shares)
         total = sum(shares.values())
@@ -342,14 +350,14 @@ def _on_one_basis(
     stated = {basis for basis in bases if basis is not None}
     if len(stated) > 1 or (amounts and None in bases):
         raise CompositionError("The columns are on different bases", allowed="one for all")
-    basis = stated.pop() if stated else by
-    if basis is None:
+    chosen = stated.pop() if stated else by
+    if chosen is None:
         raise CompositionError(
             "The columns don't say their basis", allowed=f"by= one of {', '.join(BASES)}, or wt%"
         )
-    if by is not None and by != basis:
-        raise CompositionError(f"by={by!r} contradicts the headers, which are by {basis}")
-    return shares, basis, amounts
+    if by is not None and by != chosen:
+        raise CompositionError(f"by={by!r} contradicts the headers, which are by {chosen}")
+    return shares, chosen, amounts
 
 
 def grid(

@@ -9,7 +9,13 @@ from typing import TYPE_CHECKING, Any, Final, overload
 import numpy as np
 
 from dropkit import units
-from dropkit.errors import DropkitWarning, MissingProperty, OutOfRange, UnknownName, nearest
+from dropkit.errors import (
+    DropkitWarning,
+    MissingProperty,
+    RecalledWarning,
+    UnknownName,
+    nearest,
+)
 from dropkit.properties.curves import CHUNK, Fast, FloatArray
 from dropkit.provenance import Grade, Trail, worst_grade
 from dropkit.validity import Outside, Range, check_outside, settle
@@ -68,6 +74,7 @@ class Fluid:
 
     def __init__(self) -> None:
         self._fast: dict[str, Fast] = {}
+        self._looked: set[str] = set()
 
     # ------------------------------------------------ what a kind of fluid must say
     def available(self) -> tuple[str, ...]:
@@ -129,7 +136,22 @@ class Fluid:
         fast = self._fast.get(prop)
         if fast is not None and type(kelvin) is float and fast.low <= kelvin <= fast.high:
             return units.give(fast.value(kelvin), prop, asked)
+        self._warn_if_recalled(prop)
         return units.give(self._evaluate(prop, kelvin, outside), prop, asked)
+
+    def _warn_if_recalled(self, prop: str) -> None:
+        """One warning per fluid and property where a record from memory enters."""
+        if prop in self._looked or prop not in self.available():
+            return
+        self._looked.add(prop)
+        used = [r.record for r in self._trail(prop, None).records if r.grade == "recalled"]
+        if used:
+            warnings.warn(
+                f"{prop} of {self.name} rests on memory ({', '.join(used)}; grade 'recalled'): "
+                "uncertain by 5 % at least",
+                RecalledWarning,
+                stacklevel=4,
+            )
 
     def _evaluate(self, prop: str, temperature: Any, outside: Outside) -> Any:
         """A property at SI temperatures: float, array or Series, with the range policy applied."""
@@ -139,7 +161,7 @@ class Fluid:
             values = self._evaluate(prop, temperature.to_numpy(dtype=float), outside)
             return type(temperature)(values, index=temperature.index, name=prop)
         limits = self._range(prop)
-        lowest = np.nanmin(temperature) if np.size(temperature) else np.nan
+        lowest = np.fmin.reduce(np.ravel(temperature), initial=np.inf)
         hint = KELVIN_HINT if lowest < 150.0 and limits.low > 150.0 else ""
         lost = settle(f"{prop} of {self.name}", temperature, limits, outside, hint=hint)
         unfit = self._settle_composition(prop, outside)
@@ -168,12 +190,12 @@ class Fluid:
         shape = np.broadcast_shapes(np.shape(temperature), self._shape())
         flat = np.broadcast_to(temperature, shape).reshape(-1)
         fluid = self._broadcast(shape)
-        out = np.empty(flat.size)
+        work = np.empty(flat.size)
         with np.errstate(all="ignore"):
             for start in range(0, flat.size, CHUNK):
                 part = slice(start, start + CHUNK)
-                fluid._fill(prop, part, flat[part], out[part])
-        out = out.reshape(shape)
+                fluid._fill(prop, part, flat[part], work[part])
+        out = work.reshape(shape)
         asked_nan = np.broadcast_to(np.isnan(temperature), shape)
         deep = np.broadcast_to(np.asarray(temperature) < 0.5 * limits.low, shape)
         gone = np.broadcast_to(np.asarray(lost) | np.asarray(unfit), shape)
@@ -309,9 +331,7 @@ class Fluid:
         """
         from dropkit.properties.search import find
 
-        return find(
-            self, target, at=at, vary=vary, between=between, by=by, plausible=plausible
-        )
+        return find(self, target, at=at, vary=vary, between=between, by=by, plausible=plausible)
 
     # ------------------------------------------------ the properties
     # One overload pair each: floats give float, anything else depends on what is asked.

@@ -87,9 +87,7 @@ def mixture(
     >>> 1e3 < ink.density(293.15) < 1.2e3
     True
     """
-    composition = read_composition(
-        components, by=by, normalise=normalise, measured_at=measured_at
-    )
+    composition = read_composition(components, by=by, normalise=normalise, measured_at=measured_at)
     return Mixture(composition, estimates=estimates)
 
 
@@ -260,7 +258,9 @@ class Mixture(Fluid):
         if self._pure is not None:
             return self._pure._missing(prop)
         if prop == "kinematic_viscosity":
-            prop = "viscosity" if isinstance(self._blend("viscosity"), MissingProperty) else "density"
+            prop = (
+                "viscosity" if isinstance(self._blend("viscosity"), MissingProperty) else "density"
+            )
         found = self._blend(prop)
         return found if isinstance(found, MissingProperty) else super()._missing(prop)
 
@@ -354,8 +354,9 @@ class Mixture(Fluid):
         cautions = [text for block in used for text in block.cautions]
         if prop == "viscosity":
             cautions.append("viscosity at low shear")
+        cautions += self._phase_cautions(temperature)
         return Trail(
-            property=prop,
+            quantity=prop,
             subject=self.name,
             method=rule.method,
             grade=worst_grade(grades),
@@ -365,6 +366,28 @@ class Mixture(Fluid):
             cautions=tuple(dict.fromkeys(cautions)),
             versions=versions(),
         )
+
+    def _phase_cautions(self, temperature: float | FloatArray | None) -> list[str]:
+        """Where a component would boil or freeze by itself; the mixture's points aren't predicted."""
+        if temperature is None or not np.isfinite(temperature).any():
+            return []
+        low, high = float(np.nanmin(temperature)), float(np.nanmax(temperature))
+        texts = []
+        for key in self._keys:
+            entry = records.liquid_record(key)
+            if entry.kind != "liquid":
+                continue
+            if entry.boiling_point is not None and high > entry.boiling_point:
+                texts.append(
+                    f"above the boiling point of {entry.name} "
+                    f"({entry.boiling_point - 273.15:.1f} degC): may need pressure to stay liquid"
+                )
+            if entry.melting_point is not None and low < entry.melting_point:
+                texts.append(
+                    f"below the melting point of {entry.name} "
+                    f"({entry.melting_point - 273.15:.1f} degC): freezing is not predicted"
+                )
+        return texts
 
     def _spread(self, rule: Blend, prop: str, temperature: float | FloatArray | None) -> float:
         """Relative standard uncertainty: of the pairs, the pure ends by their share, and estimates."""
@@ -388,7 +411,5 @@ class Mixture(Fluid):
         return display.fluid_html(self, f"Mixture {self.name}")
 
 
-def _rebuild(
-    composition: Composition, estimates: Literal["warn", "allow", "refuse"]
-) -> Mixture:
+def _rebuild(composition: Composition, estimates: Literal["warn", "allow", "refuse"]) -> Mixture:
     return Mixture(composition, estimates=estimates, quiet=True)

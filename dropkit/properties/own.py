@@ -33,13 +33,13 @@ class OwnCurve:
 
     Parameters
     ----------
-    property : str
+    quantity : str
         What it gives.
     temperatures, values : tuple of float
         Pairs [K, SI]; empty temperatures mean a constant at all temperatures.
     """
 
-    property: str
+    quantity: str
     temperatures: tuple[float, ...]
     values: tuple[float, ...]
 
@@ -59,7 +59,7 @@ class OwnCurve:
             return "own value, held constant over temperature"
         if len(self.temperatures) == 1:
             return f"own value at {self.temperatures[0] - 273.15:g} degC"
-        line = "ln(value) over 1/T" if self.property in _EXPONENTIAL else "value over T"
+        line = "ln(value) over 1/T" if self.quantity in _EXPONENTIAL else "value over T"
         return f"own {len(self.values)} values, straight lines in {line}"
 
     def scalar(self, temperature: float) -> float:
@@ -72,7 +72,7 @@ class OwnCurve:
         """Values [SI] at temperatures [K]; end segments go on outside."""
         if len(self.values) == 1:
             return np.full(temperature.shape, self.values[0])
-        curved = self.property in _EXPONENTIAL
+        curved = self.quantity in _EXPONENTIAL
         x = 1.0 / temperature if curved else temperature
         known = np.array(self.temperatures)
         place = np.clip(np.searchsorted(known, temperature, side="right") - 1, 0, known.size - 2)
@@ -326,7 +326,7 @@ class OwnFluid(Fluid):
     def _own_trail(self, prop: str, method: str, assumptions: tuple[str, ...]) -> Trail:
         cautions = ("viscosity at low shear",) if prop == "viscosity" else ()
         return Trail(
-            property=prop,
+            quantity=prop,
             subject=self.name,
             method=method,
             grade="own",

@@ -2,17 +2,16 @@
 
 from __future__ import annotations
 
-import warnings
 from collections.abc import Callable
 from typing import Any, Final
 
 import numpy as np
 
 from dropkit import __version__, records
-from dropkit.errors import NotALiquid, RecalledWarning
+from dropkit.errors import NotALiquid
 from dropkit.properties import display
 from dropkit.properties.catalogue import resolve
-from dropkit.properties.curves import CHUNK, Curve, FloatArray
+from dropkit.properties.curves import Curve, FloatArray
 from dropkit.properties.interface import PROPERTIES, Fluid
 from dropkit.provenance import RecordUse, Trail, worst_grade
 from dropkit.validity import Range
@@ -81,18 +80,6 @@ class Liquid(Fluid):
         self.key = record.key
         self.name = record.name
         self._curves: dict[str, Curve] = {}
-        recalled = [
-            prop
-            for prop, blocks in record.properties.items()
-            if prop in PROPERTIES and any(block.grade == "recalled" for block in blocks)
-        ]
-        if recalled:
-            warnings.warn(
-                f"{record.name}: {', '.join(recalled)} from memory (grade 'recalled'): "
-                "uncertain by 5 % at least",
-                RecalledWarning,
-                stacklevel=3,
-            )
 
     def __reduce__(self) -> tuple[Any, ...]:
         return (_load, (self.key,))
@@ -215,7 +202,7 @@ class Liquid(Fluid):
             cautions.append("viscosity at low shear")
         cautions += self.phase_cautions(temperature)
         return Trail(
-            property=prop,
+            quantity=prop,
             subject=self.name,
             method="; ".join(dict.fromkeys(f"{b.form} ({b.obtained})" for b in blocks)),
             grade=worst_grade(block.grade for block in blocks),
@@ -232,7 +219,9 @@ class Liquid(Fluid):
         low, high = float(np.nanmin(temperature)), float(np.nanmax(temperature))
         texts = []
         if self.melting_point is not None and low < self.melting_point:
-            texts.append(f"supercooled: {self.name} melts at {self.melting_point - 273.15:.1f} degC")
+            texts.append(
+                f"supercooled: {self.name} melts at {self.melting_point - 273.15:.1f} degC"
+            )
         if self.boiling_point is not None and high > self.boiling_point:
             need = ""
             if "vapour_pressure" in self.record.properties:
@@ -277,7 +266,7 @@ def relative_uncertainty(block: records.PropertyRecord, value: float | None) -> 
     """Relative standard uncertainty of a record, from an absolute one by way of a value."""
     if block.uncertainty_absolute is None:
         return block.uncertainty
-    scale = value if value is not None else block.checks[0].value
+    scale = value if value is not None else float(block.checks[0]["value"])
     return block.uncertainty_absolute / scale
 
 
@@ -310,7 +299,7 @@ def quotient_trail(fluid: Fluid, temperature: float | FloatArray | None) -> Trai
     parts = [fluid._trail(name, temperature) for name in ("viscosity", "density")]
     known = [part.uncertainty for part in parts if part.uncertainty is not None]
     return Trail(
-        property="kinematic_viscosity",
+        quantity="kinematic_viscosity",
         subject=fluid.name,
         method=f"viscosity over density ({'; '.join(dict.fromkeys(p.method for p in parts))})",
         grade=worst_grade(part.grade for part in parts),

@@ -27,7 +27,7 @@ class Found:
 
     Parameters
     ----------
-    property : str
+    quantity : str
         What was wanted.
     target : float
         The wanted value [SI].
@@ -47,7 +47,7 @@ class Found:
         Whether `solutions` come as Quantities where they have a unit.
     """
 
-    property: str
+    quantity: str
     target: float
     vary: str
     by: str
@@ -75,9 +75,9 @@ class Found:
     @property
     def message(self) -> str:
         """The answer in one line."""
-        unit = display.unit_of(self.property)
+        unit = display.unit_of(self.quantity)
         shown = [
-            f"{display.number(display.in_stock(self.property, value))} {unit}"
+            f"{display.number(display.in_stock(self.quantity, value))} {unit}"
             for value in (self.target, *self.reaches)
         ]
         if self.vary == "temperature":
@@ -85,13 +85,15 @@ class Found:
             found = ", ".join(f"{value - 273.15:.5g} degC" for value in self.values)
         else:
             ends = [f"{100 * end:.4g} %" for end in self.between]
-            found = ", ".join(f"{100 * value:.5g} % {self.vary} by {self.by}" for value in self.values)
+            found = ", ".join(
+                f"{100 * value:.5g} % {self.vary} by {self.by}" for value in self.values
+            )
         if not self.values:
             return (
-                f"{self.property} = {shown[0]}: none; between {ends[0]} and {ends[1]} "
+                f"{self.quantity} = {shown[0]}: none; between {ends[0]} and {ends[1]} "
                 f"{self.vary} it reaches from {shown[1]} to {shown[2]}"
             )
-        return f"{self.property} = {shown[0]} at {found}"
+        return f"{self.quantity} = {shown[0]} at {found}"
 
     def __repr__(self) -> str:
         return self.message
@@ -102,7 +104,7 @@ class Found:
     def to_dict(self) -> dict[str, Any]:
         """A dict of plain types that survives JSON."""
         return {
-            "property": self.property,
+            "property": self.quantity,
             "target": self.target,
             "vary": self.vary,
             "by": self.by,
@@ -220,9 +222,7 @@ def _by_composition(
     return Found(prop, value, key, by, roots, fluids, (low, high), reaches, in_units)
 
 
-def _fill_up(
-    others: Mapping[str, Any], share: Any, rest: str, before: float
-) -> dict[str, Any]:
+def _fill_up(others: Mapping[str, Any], share: Any, rest: str, before: float) -> dict[str, Any]:
     """The other components beside a varied share: the rest gives way, else all in proportion."""
     if rest:
         return {

@@ -103,6 +103,8 @@ class State:
         return self._values[prop]
 
     def _property(self, prop: str) -> Any:
+        if self._fluid is not None:
+            self._fluid._warn_if_recalled(prop)
         return self._give(prop, self._si(prop))
 
     @property
@@ -328,7 +330,7 @@ class State:
         return state
 
     def _rows(self) -> list[tuple[str, ...]]:
-        rows = []
+        rows: list[tuple[str, ...]] = []
         for prop in self.available():
             try:
                 value, trail = self._si(prop), self.trail(prop)

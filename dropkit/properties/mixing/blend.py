@@ -194,7 +194,7 @@ class Blend:
 
     def limits(self) -> list[tuple[tuple[int, ...], tuple[int, ...], Range, PropertyRecord]]:
         """Composition limits: (numerator, denominator) component numbers, range, record."""
-        found = []
+        found: list[tuple[tuple[int, ...], tuple[int, ...], Range, PropertyRecord]] = []
         for i, j, pair in self.pairs:
             a, b = self.solvents[i], self.solvents[j]
             found.append(((a,), (a, b), _fraction_range(pair.record, self.keys[a]), pair.record))
@@ -224,9 +224,7 @@ class Blend:
             total = fractions[i] + fractions[j]
             if total > 0.0:
                 two = (fractions[i] / total, fractions[j] / total)
-                cap = collapse(
-                    self.transform, (ends[i], ends[j]), two, [pair.at_composition(*two)]
-                )
+                cap = collapse(self.transform, (ends[i], ends[j]), two, [pair.at_composition(*two)])
                 value = _lower(value, cap)
         return self._salted_scalar(value, mass) if self.salts else value
 
@@ -256,6 +254,7 @@ class Blend:
             return np.exp(logarithm)
         water = self.records.index(next(e for e in self.records if e.key == "water"))
         end = self.curves[water]
+        pure: Any
         if isinstance(temperature, np.ndarray):
             pure = np.empty(temperature.shape)
             end.fill(temperature, pure)

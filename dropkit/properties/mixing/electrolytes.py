@@ -51,11 +51,7 @@ def apparent_viscosity(parameters: Mapping[str, Any], solute: Any, temperature: 
     """
     v1, v2, v3, v4, v5, v6 = (parameters[f"v{i}"] for i in range(1, 7))
     celsius = temperature - 273.15
-    return (
-        1e-3
-        * np.exp((v1 * solute**v2 + v3) / (v4 * celsius + 1.0))
-        / (v5 * solute**v6 + 1.0)
-    )
+    return 1e-3 * np.exp((v1 * solute**v2 + v3) / (v4 * celsius + 1.0)) / (v5 * solute**v6 + 1.0)
 
 
 def surface_tension_ratio(

@@ -146,7 +146,7 @@ def collapse(
         log, exp = math.log, math.exp
         if len(terms) == 2 and width <= 3:
             (x1, y1), (x2, y2) = terms
-            c0, c1, c2 = (sums + [0.0, 0.0])[:3]
+            c0, c1, c2 = [*sums, 0.0, 0.0][:3]
 
             def binary(temperature: float) -> float:
                 th = (temperature - 298.15) * 0.01
