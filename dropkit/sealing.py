@@ -11,7 +11,6 @@ import json
 import os
 import re
 import sys
-import tempfile
 import tomllib
 from collections.abc import Sequence
 from pathlib import Path
@@ -143,10 +142,11 @@ class _Run:
 
 def _replace(path: Path, text: str) -> None:
     """Write a file in one step, so that nobody reads half of it."""
-    handle, name = tempfile.mkstemp(dir=path.parent, suffix=".part")
-    with os.fdopen(handle, "wb") as file:
-        file.write(text.encode("utf-8"))
-    os.replace(name, path)
+    part = path.with_name(f"{path.name}.{os.getpid()}.part")
+    part.write_bytes(text.encode("utf-8"))
+    if path.exists():
+        part.chmod(path.stat().st_mode)
+    os.replace(part, path)
 
 
 def main(arguments: Sequence[str] | None = None, root: str | Path | None = None) -> int:

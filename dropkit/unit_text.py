@@ -334,7 +334,7 @@ def _split(text: str) -> tuple[str, str]:
         raise BadInput("it does not start with a number",
                        hint="Write a number and a unit, such as '60 um'")  # fmt: skip
     unit = plain[match.end() :].strip()
-    if unit[:1].isdigit() or unit[:1] == "_":
+    if re.match("_?[0-9]", unit) and not re.match("1 ?/", unit):
         raise BadInput("it holds two numbers", hint="Write thousands without a space: '1000 um'")
     return match[0], unit
 

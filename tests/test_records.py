@@ -339,6 +339,18 @@ def test_sealing_twice_writes_nothing(folder: Path) -> None:
     assert {path: path.stat().st_mtime_ns for path in folder.rglob("*.*")} == before
 
 
+@pytest.mark.skipif(os.name == "nt", reason="Windows has no such modes")
+def test_sealing_keeps_the_mode_of_a_file(folder: Path) -> None:
+    usual = (folder / "dropkit-data.toml").stat().st_mode
+    assert (folder / "index.json").stat().st_mode == usual
+    path = folder / "liquids/alpha.toml"
+    path.chmod(0o640)
+    made_up.edit(folder, "liquids/alpha.toml", "-0.50]", "-0.51]")
+    assert sealing.main(["seal"], root=folder) == 0
+    assert path.stat().st_mode & 0o777 == 0o640
+    assert not list(folder.rglob("*.part"))
+
+
 SEAL = "0" * 32
 
 

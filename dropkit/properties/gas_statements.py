@@ -91,7 +91,7 @@ STATEMENTS: Final[dict[str, Statement]] = {
     "heat_capacity": Statement(
         "heat_capacity", "ideal gas of both parts and the second virial coefficient",
         "planck_einstein", "single", ("Lemmon2000", "HylandWexler1983"),
-        "ideal-gas part; B of air, water and the pair", lambda t, p, x: 1e-3 + 4e-3 * x,
+        "ideal-gas part; B of air, water and the pair", lambda t, p, x: 1e-3 + 1e-2 * x,
         assumptions=(_COMPOSITION,), humid_sources=("IAPWS1995",),
     ),
     "vapour_diffusivity": Statement(

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from collections.abc import Iterator
 from typing import TYPE_CHECKING, Any
 
 import numpy as np
@@ -216,16 +217,24 @@ class State:
             self._cautions = tuple(dict.fromkeys(texts))
         return self._cautions
 
+    def _given(self) -> Iterator[tuple[str, Any, Trail | None, str]]:
+        """Property, value [SI], trail, and the reason where it can't be given here."""
+        for prop in self.available():
+            try:
+                yield prop, self._si(prop), self.trail(prop), ""
+            except (ValueError, LookupError) as problem:
+                yield prop, float("nan"), None, str(problem)
+
     @property
     def assumptions(self) -> tuple[str, ...]:
         """What was taken for granted in any property."""
-        texts = (text for prop in self.available() for text in self.trail(prop).assumptions)
+        texts = (text for _, _, trail, _ in self._given() if trail for text in trail.assumptions)
         return tuple(dict.fromkeys(texts))
 
     @property
     def sources(self) -> tuple[str, ...]:
         """Keys of the sources that the properties rest on."""
-        keys = (key for prop in self.available() for key in self.trail(prop).sources)
+        keys = (key for _, _, trail, _ in self._given() if trail for key in trail.sources)
         return tuple(dict.fromkeys(keys))
 
     # ------------------------------------------------ upper layers
@@ -271,11 +280,9 @@ class State:
         import pandas as pd
 
         rows = []
-        for prop in self.available():
-            try:
-                value, trail = self._si(prop), self.trail(prop)
-            except (ValueError, LookupError) as problem:
-                rows.append({"property": prop, "value": float("nan"), "method": str(problem)})
+        for prop, value, trail, reason in self._given():
+            if trail is None:
+                rows.append({"property": prop, "value": value, "method": reason})
                 continue
             if trail.grade == "estimated" and not estimates:
                 continue
@@ -299,13 +306,10 @@ class State:
     def to_dict(self) -> dict[str, Any]:
         """A dict of plain types that survives JSON; `from_dict` rebuilds the state."""
         values, trails = {}, {}
-        for prop in self.available():
-            try:
-                value, trail = self._si(prop), self.trail(prop)
-            except (ValueError, LookupError):
-                continue
-            values[prop] = _plain(value)
-            trails[prop] = trail.to_dict()
+        for prop, value, trail, _ in self._given():
+            if trail is not None:
+                values[prop] = _plain(value)
+                trails[prop] = trail.to_dict()
         return {
             "kind": "State",
             "name": self.name,
@@ -331,11 +335,9 @@ class State:
 
     def _rows(self) -> list[tuple[str, ...]]:
         rows: list[tuple[str, ...]] = []
-        for prop in self.available():
-            try:
-                value, trail = self._si(prop), self.trail(prop)
-            except (ValueError, LookupError) as problem:
-                rows.append((prop, "", "", "", str(problem), "", "", ""))
+        for prop, value, trail, reason in self._given():
+            if trail is None:
+                rows.append((prop, "", "", "", reason, "", "", ""))
                 continue
             shown = display.in_stock(prop, value) if self._with_units else value
             spread = "" if trail.uncertainty is None else f"+-{200 * trail.uncertainty:.2g} %"

@@ -22,7 +22,7 @@ every_number = pytest.mark.parametrize("entry", ENTRIES, ids=NAMES)
 # digits by cancellation, and equality can be asked for to nine.
 steps = st.integers(1, 999)
 # Seventy numbers times this many cases.
-few = settings(max_examples=20)
+few = settings(max_examples=15)
 
 
 def value_of(kind: str, step: int, power: int) -> float:

@@ -1,0 +1,273 @@
+"""How close dropkit comes to every published point that it ships, and to water's standards.
+
+Run it:  python tests/bench/accuracy.py [--markdown]
+
+A point counts if its temperature and composition lie in the stated range of the record
+and it stands in no row of data/published/excluded.csv. Left-out errors are those that the
+builder wrote into the records: a source, or every fifth point, refitted without.
+"""
+
+from __future__ import annotations
+
+import csv
+import sys
+import warnings
+from collections.abc import Iterator
+from pathlib import Path
+from typing import Any
+
+import numpy as np
+import pandas as pd
+
+import dropkit as dk
+from dropkit import records
+from dropkit.properties.composition import to_mass
+from dropkit.properties.interface import GRADED
+
+PURE_REACH = {"density": (0.05, 0.3), "viscosity": (1.5, 5.0), "surface_tension": (1.0, 3.0)}
+PAIR_REACH = {"density": 0.1, "viscosity": 3.0, "surface_tension": 2.0}
+
+
+def rows(folder: str) -> Iterator[tuple[str, dict[str, str]]]:
+    """Every published row of a folder that isn't excluded, with the name of its file."""
+    published = records.data_dir() / "published"
+    with (published / "excluded.csv").open(encoding="utf-8", newline="") as lines:
+        out = {
+            (r["file"], r["component_1"], r["property"], r["T_K"], r["fraction_1"], r["value"])
+            for r in csv.DictReader(line for line in lines if not line.startswith("#"))
+        }
+    for path in sorted((published / folder).glob("*.csv")):
+        name = f"{folder}/{path.stem}"
+        with path.open(encoding="utf-8", newline="") as lines:
+            for row in csv.DictReader(line for line in lines if not line.startswith("#")):
+                first = row.get("component_1", row.get("liquid", ""))
+                share = row.get("fraction_1", "")
+                if (name, first, row["property"], row["T_K"], share, row["value"]) not in out:
+                    yield name, row
+
+
+def recalled(name: str) -> bool:
+    """Files from memory count towards no target."""
+    return "recalled" in name
+
+
+def pure_points() -> pd.DataFrame:
+    """Deviation in percent of each pure liquid from each published point in range."""
+    found: list[dict[str, Any]] = []
+    table = pd.DataFrame([{"file": name, **row} for name, row in rows("liquids")])
+    for (key, prop), part in table.groupby(["liquid", "property"]):
+        if prop not in GRADED or records.liquid_record(str(key)).kind != "liquid":
+            continue
+        fluid = dk.liquid(str(key))
+        if prop not in fluid.available():
+            continue
+        kelvin = part["T_K"].to_numpy(float)
+        value = part["value"].to_numpy(float)
+        ours = getattr(fluid, str(prop))(kelvin, outside="nan")
+        for name, t, y, f in zip(part["file"], kelvin, value, ours, strict=True):
+            if np.isfinite(f):
+                found.append(
+                    {
+                        "liquid": key,
+                        "property": prop,
+                        "file": name,
+                        "T": t,
+                        "off": 100 * (f / y - 1),
+                    }
+                )
+    return pd.DataFrame(found)
+
+
+def pair_points() -> pd.DataFrame:
+    """Deviation in percent of each fitted pair from each published point in range."""
+    found: list[dict[str, Any]] = []
+    table = pd.DataFrame([{"file": name, **row} for name, row in rows("mixtures")])
+    for (a, b, basis), part in table.groupby(["component_1", "component_2", "basis"]):
+        keys = (str(a), str(b))
+        pair = records.pair_record(*keys)
+        if pair is None:
+            continue
+        for prop, group in part.groupby("property"):
+            if prop not in pair.properties or prop not in GRADED:
+                continue
+            share = group["fraction_1"].to_numpy(float)
+            mass = to_mass(keys, (share, 1.0 - share), str(basis))
+            kelvin = group["T_K"].to_numpy(float)
+            frame = pd.DataFrame({"temperature": kelvin, keys[0]: mass[0], keys[1]: mass[1]})
+            result = dk.lookup(frame, [str(prop)], by="mass")
+            ours = result.filter(like=f"{prop} [").iloc[:, 0].to_numpy()
+            for name, t, w, y, f in zip(
+                group["file"], kelvin, mass[0], group["value"].to_numpy(float), ours, strict=True
+            ):
+                if np.isfinite(f):
+                    found.append(
+                        {"pair": f"{a} + {b}", "property": prop, "file": name, "T": t, "w": w,
+                         "value": y, "off": 100 * (f / y - 1), "absolute": f - y}
+                    )  # fmt: skip
+    return pd.DataFrame(found)
+
+
+def _left_out(record: Any) -> str:
+    entry = record.left_out
+    if not entry:
+        return ""
+    return f"{100 * entry['median']:.2g} / {100 * entry['p95']:.2g}"
+
+
+def pure_table(points: pd.DataFrame) -> pd.DataFrame:
+    """Median and 95 % of the deviations by liquid and property, beside the reach."""
+    lines = []
+    for (key, prop), part in points.groupby(["liquid", "property"]):
+        off = part["off"].abs()
+        median, most = PURE_REACH[prop]
+        blocks = records.liquid_record(key).properties[prop]
+        lines.append(
+            {
+                "liquid": key,
+                "property": prop,
+                "points": len(off),
+                "median %": round(off.median(), 3),
+                "95 %": round(off.quantile(0.95), 3),
+                "reach": f"{median} / {most}",
+                "reached": off.median() <= median and off.quantile(0.95) <= most,
+                "left out, median / 95 %": _left_out(blocks[0]),
+                "grade": blocks[0].grade,
+            }
+        )
+    return pd.DataFrame(lines)
+
+
+def pair_table(points: pd.DataFrame) -> pd.DataFrame:
+    """Median per file, worst, and points beyond three times the reach."""
+    lines = []
+    for (pair, prop, name), part in points.groupby(["pair", "property", "file"]):
+        off = part["off"].abs()
+        reach = PAIR_REACH[prop]
+        block = records.pair_record(*pair.split(" + ")).properties[prop][0]
+        lines.append(
+            {
+                "pair": pair,
+                "property": prop,
+                "file": name.rpartition("/")[2],
+                "points": len(off),
+                "median %": round(off.median(), 3),
+                "worst %": round(off.max(), 2),
+                "reach": reach,
+                "reached": off.median() <= reach,
+                "beyond 3x": int((off > 3 * reach).sum()),
+                "left out, median / 95 %": _left_out(block),
+                "from memory": recalled(name),
+            }
+        )
+    return pd.DataFrame(lines)
+
+
+def water_table() -> pd.DataFrame:
+    """Water against the IAPWS formulations at 0 to 100 degC and 1 atm or saturation."""
+    from CoolProp.CoolProp import PropsSI
+
+    kelvin = np.linspace(273.16, 373.12, 101)
+    water = dk.liquid("water")
+    density = np.array([PropsSI("D", "T", t, "Q", 0, "Water") for t in kelvin])
+    viscosity = np.array([PropsSI("V", "T", t, "Q", 0, "Water") for t in kelvin])
+    # CoolProp's surface tension of water isn't IAPWS'; R1-76(2014) in closed form.
+    tau = 1.0 - kelvin / 647.096
+    tension = 0.2358 * tau**1.256 * (1.0 - 0.625 * tau)
+    lines = []
+    for prop, standard, reach in (
+        ("density", density, 0.01),
+        ("viscosity", viscosity, 0.1),
+        ("surface_tension", tension, 0.05),
+    ):
+        off = 100 * np.abs(getattr(water, prop)(kelvin) / standard - 1)
+        lines.append({"property": prop, "worst %": float(off.max()), "reach": reach,
+                      "reached": bool(off.max() <= reach)})  # fmt: skip
+    return pd.DataFrame(lines)
+
+
+def special_table(points: pd.DataFrame) -> pd.DataFrame:
+    """The reaches that the two chief mixtures have of their own."""
+    lines = []
+
+    def line(what: str, value: float, reach: float, unit: str = "%") -> None:
+        lines.append({"what": what, "worst": round(float(value), 4), "reach": reach, "unit": unit,
+                      "reached": bool(value <= reach)})  # fmt: skip
+
+    def pick(pair: str, prop: str, name: str = "") -> pd.DataFrame:
+        chosen = points[(points["pair"] == pair) & (points["property"] == prop)]
+        return chosen[chosen["file"].str.endswith(name)] if name else chosen
+
+    glycerol, ethanol = "glycerol + water", "ethanol + water"
+    segur = pick(glycerol, "viscosity", "SegurOberstar1951")
+    line(f"glycerol viscosity, Segur & Oberstar ({len(segur)} points)", segur.off.abs().max(), 2.5)
+    bosart = pick(glycerol, "density", "BosartSnoddy1927")
+    line(f"glycerol density, Bosart & Snoddy ({len(bosart)})", bosart.off.abs().max(), 0.06)
+    egorov = pick(glycerol, "density", "Egorov2013")
+    cool = egorov[egorov["T"] <= 333.16]
+    hot = egorov[egorov["T"] > 333.16]
+    line(f"glycerol density, Egorov to 60 degC ({len(cool)})", cool.off.abs().max(), 0.1)
+    line(f"glycerol density, Egorov above 60 degC ({len(hot)})", hot.off.abs().max(), 0.2)
+    line("glycerol surface tension against the mean of its sources",
+         _from_mean(pick(glycerol, "surface_tension")), 1.0, "mN/m")  # fmt: skip
+    oiml = pick(ethanol, "density", "OIMLR22")
+    line(f"ethanol density, OIML R 22 ({len(oiml)})", oiml.off.abs().max(), 0.05)
+    viscosity = pick(ethanol, "viscosity")
+    line(f"ethanol viscosity, median ({len(viscosity)})", viscosity.off.abs().median(), 3.0)
+    line("ethanol viscosity, worst", viscosity.off.abs().max(), 7.0)
+    tension = pick(ethanol, "surface_tension")
+    seen = tension[~tension["file"].map(recalled)]
+    if len(seen):
+        line(f"ethanol surface tension, seen sources ({len(seen)})", seen.off.abs().median(), 1.5)
+    memory = tension[tension["file"].map(recalled)]
+    if len(memory):
+        line(f"ethanol surface tension, from memory, median ({len(memory)})",
+             memory.off.abs().median(), 1.5)  # fmt: skip
+    return pd.DataFrame(lines)
+
+
+def _from_mean(points: pd.DataFrame) -> float:
+    """Worst distance [mN/m] from the mean of the two sources, where both have a value nearby."""
+    points = points[points["T"] <= 323.16]
+    takamura = points[points["file"].str.endswith("Takamura2012")]
+    other = points[points["file"].str.endswith("GPA1963")]
+    worst = 0.0
+    for _, row in takamura.iterrows():
+        near = other[(abs(other["T"] - row["T"]) < 0.5) & (abs(other["w"] - row["w"]) < 0.03)]
+        # Each source's distance from ours; their mean is what the reach speaks of.
+        offs = [row["absolute"], *near["absolute"]]
+        worst = max(worst, abs(float(np.mean(offs))) * 1e3)
+    return worst
+
+
+def main(arguments: list[str]) -> None:
+    """Print all tables; with --markdown, as the page docs/accuracy.md holds them."""
+    warnings.simplefilter("ignore")
+    pure, pairs = pure_points(), pair_points()
+    beyond = pairs[pairs["off"].abs() > 3 * pairs["property"].map(PAIR_REACH)]
+    tables = {
+        "Water against IAPWS": water_table(),
+        "Glycerol-water and ethanol-water": special_table(pairs),
+        "Pure liquids": pure_table(pure),
+        "Pairs, by file": pair_table(pairs),
+        "Points of pairs beyond three times the reach": beyond[
+            ["pair", "property", "file", "T", "w", "value", "off"]
+        ].round(5),
+    }
+    for title, table in tables.items():
+        if "--markdown" in arguments:
+            print(f"\n## {title}\n\n{markdown(table)}")
+        else:
+            print(f"\n{title}\n{table.to_string(index=False)}")
+
+
+def markdown(table: pd.DataFrame) -> str:
+    """A table in Markdown."""
+    head = "| " + " | ".join(map(str, table.columns)) + " |"
+    rule = "|" + " --- |" * len(table.columns)
+    body = ["| " + " | ".join(str(x) for x in row) + " |" for row in table.itertuples(index=False)]
+    return "\n".join([head, rule, *body])
+
+
+if __name__ == "__main__":
+    sys.path.insert(0, str(Path(__file__).parent))
+    main(sys.argv[1:])

@@ -1,0 +1,31 @@
+"""What is measured: temperatures, compositions, and the six-component mixture."""
+
+from __future__ import annotations
+
+from typing import Any
+
+import numpy as np
+
+LOW, HIGH = 293.15, 333.15  # K; inside every record that is timed
+TEMPERATURES = np.linspace(LOW, HIGH, 1000).tolist()
+STRINGS = [f"{celsius:.1f} degC" for celsius in np.linspace(20.0, 60.0, 100)]
+
+# An invented recipe; pairs without a record are estimated.
+SIX = {
+    "water": "rest",
+    "glycerol": 0.20,
+    "ethanol": 0.10,
+    "methanol": 0.05,
+    "2-propanol": 0.05,
+    "ethylene_glycol": 0.05,
+}
+
+
+def temperatures(count: int) -> Any:
+    """That many temperatures [K], in no order."""
+    return np.random.default_rng(2026).uniform(LOW, HIGH, count)
+
+
+def fractions(count: int) -> Any:
+    """That many mass fractions, in no order."""
+    return np.random.default_rng(1).uniform(0.05, 0.95, count)
