@@ -10,6 +10,7 @@ import os
 import re
 import threading
 from collections.abc import Callable, Mapping
+from types import MappingProxyType
 from typing import Any, Final, TypeVar
 
 from dropkit.errors import RecordError, UnknownName, nearest
@@ -213,7 +214,11 @@ class Store:
         if found is None:
             with LOCK:
                 if self._index is None:
-                    self._index = self._read_index() or self.scan()
+                    content = self._read_index() or self.scan()
+                    self._index = {
+                        name: MappingProxyType(part) if isinstance(part, dict) else part
+                        for name, part in content.items()
+                    }
                 found = self._index
         return found
 

@@ -5,12 +5,12 @@ They do not name the argument; :mod:`dropkit.units` puts its name in front.
 
 from __future__ import annotations
 
-from typing import Final
+from typing import Any, Final, NoReturn
 
 from dropkit.errors import BadInput, UnitError
 from dropkit.unit_table import KINDS, LENGTH, NONE, STANDARD_ATMOSPHERE, VISCOSITY, Dimension, Kind
 
-__all__ = ["bad_form", "mark_error", "mismatch", "needs"]
+__all__ = ["bad_form", "mark_error", "mismatch", "named", "needs"]
 
 
 def bad_form(why: str, kind: Kind, hint: str = "") -> BadInput:
@@ -84,3 +84,17 @@ def mark_error(unit: str, mark: str, kind: Kind) -> UnitError:
     else:
         cure = _CURES.get(mark, "Convert it to the basis that is asked for, then write '%'")
     return UnitError(f"{unit!r} does not fit {kind.words}", allowed=needs(kind), hint=cure)
+
+
+def _shown(value: Any) -> str:
+    try:
+        text = " ".join(repr(value).split())
+    except Exception:  # a foreign object may fail to show itself
+        text = f"<{type(value).__name__}>"
+    return text if len(text) <= 60 else f"{text[:57]}..."
+
+
+def named(name: str, value: Any, error: BadInput) -> NoReturn:
+    """Raise an error again with the argument and what it got in front."""
+    what = f"{name} = {_shown(value)}: {error.what}"
+    raise type(error)(what, allowed=error.allowed, choices=error.choices, hint=error.hint) from None

@@ -14,14 +14,14 @@ import threading
 import weakref
 from collections.abc import Sequence
 from functools import cache
-from numbers import Real
 from types import ModuleType
-from typing import TYPE_CHECKING, Any, Final, NoReturn
+from typing import TYPE_CHECKING, Any, Final
 
 import numpy as np
 
 from dropkit.errors import BadInput, UnitError, Unphysical
-from dropkit.unit_errors import bad_form, mark_error, mismatch, needs
+from dropkit.unit_arrays import float_array, float_series, is_real, is_series
+from dropkit.unit_errors import bad_form, mark_error, mismatch, named, needs
 from dropkit.unit_limits import check_domain_of, check_plausible, inside, kelvin_hint
 from dropkit.unit_table import (
     KINDS,
@@ -41,10 +41,6 @@ if TYPE_CHECKING:
 __all__ = ["Asked", "give", "kelvin_hint", "read", "to_si"]
 
 _DEEPEST: Final = 16  # levels of nested lists
-_ARRAYS_OF: Final = {
-    "b": "booleans", "c": "complex numbers", "U": "text", "S": "text", "T": "text",
-    "O": "objects", "M": "dates", "m": "time spans", "V": "records",
-}  # fmt: skip
 
 
 class Asked:
@@ -201,54 +197,12 @@ def _kelvin(magnitude: Any, scale: float, value: Any, linear: bool, kind: Kind) 
 # --- forms of input ----------------------------------------------------------------------
 
 
-def _is(value: Any, module: str, name: str) -> bool:
-    """Whether a value is of a class whose module need not be loaded to know that it is not."""
-    loaded = sys.modules.get(module)
-    return loaded is not None and isinstance(value, getattr(loaded, name, ()))
-
-
-def _is_series(value: Any) -> bool:
-    return _is(value, "pandas", "Series")
-
-
-def _array(value: np.ndarray[Any, Any], kind: Kind) -> Any:
-    """A float64 array, or a float for a 0-d one."""
-    if isinstance(value, np.ma.MaskedArray):
-        if np.ma.is_masked(value):
-            raise bad_form(
-                "masked elements have no value", kind, "Fill them with NaN: x.filled(nan)"
-            )
-        value = value.data
-    letter = value.dtype.kind
-    if letter not in "fiu":
-        hint = "Text with units goes into a list, ['60 um', '70 um']" if letter in "UTSO" else ""
-        raise bad_form(f"the array holds {_ARRAYS_OF.get(letter, value.dtype.name)}", kind, hint)
-    with np.errstate(over="ignore"):  # of a longer float; infinity is refused later
-        result = np.asarray(value, dtype=np.float64)
-    return result if result.ndim else float(result)
-
-
-def _series(value: Any, kind: Kind) -> Any:
-    """A Series as float64 with its index; missing values become NaN."""
-    import pandas as pd
-
-    if value.dtype == np.float64:
-        return value
-    kinds = pd.api.types
-    if not kinds.is_numeric_dtype(value.dtype) or (
-        kinds.is_bool_dtype(value.dtype) or kinds.is_complex_dtype(value.dtype)
-    ):
-        raise bad_form(f"the Series holds {value.dtype}", kind, "Convert it to SI numbers first")
-    numbers = value.to_numpy(dtype=np.float64, na_value=np.nan)
-    return pd.Series(numbers, index=value.index, name=value.name)
-
-
 def _sequence(value: Sequence[Any], kind: Kind, depth: int) -> tuple[Any, Asked | None]:
     if depth > _DEEPEST:
         raise BadInput(f"lists are nested more than {_DEEPEST} deep")
     types = set(map(type, value))
     if all(issubclass(one, (float, int, np.floating, np.integer)) for one in types) and not any(
-        issubclass(one, bool) for one in types
+        issubclass(one, (bool, np.timedelta64)) for one in types
     ):
         try:
             return np.array(value, dtype=np.float64), None
@@ -258,7 +212,7 @@ def _sequence(value: Sequence[Any], kind: Kind, depth: int) -> tuple[Any, Asked 
         raise bad_form("a list mixes a number and text", kind,
                    "A value with its unit is a tuple, such as (60, 'um')")  # fmt: skip
     both = [_any(element, kind, depth + 1) for element in value]
-    parts = [part.to_numpy() if _is_series(part) else part for part, _ in both]
+    parts = [part.to_numpy() if is_series(part) else part for part, _ in both]
     carried = [asked for _, asked in both if asked is not None]
     if carried and len(carried) < len(parts):
         raise bad_form("some elements carry a unit and some do not", kind,
@@ -275,7 +229,7 @@ def _pair(value: tuple[Any, str], kind: Kind, depth: int) -> tuple[Any, Asked]:
     number, asked = _any(value[0], plain, depth + 1)
     if asked is not None:
         raise bad_form("it carries two units", kind)
-    if _is_series(number):
+    if is_series(number):
         number = number.to_numpy()
     return _grammar().convert(number, value[1], kind, _lookup), _ASKED
 
@@ -289,7 +243,7 @@ def _any(value: Any, kind: Kind, depth: int = 0) -> tuple[Any, Asked | None]:
         return si, _ASKED if carried else None
     if isinstance(value, (bool, np.bool_)):
         raise bad_form("a boolean is no number", kind)
-    if isinstance(value, Real) or _is(value, "decimal", "Decimal"):
+    if is_real(value):
         try:
             return float(value), None
         except (OverflowError, ValueError):
@@ -297,7 +251,7 @@ def _any(value: Any, kind: Kind, depth: int = 0) -> tuple[Any, Asked | None]:
     if hasattr(value, "_REGISTRY") and hasattr(value, "magnitude"):
         return _magnitude(value, kind), Asked(value._REGISTRY)
     if isinstance(value, np.ndarray):
-        return _array(value, kind), None
+        return float_array(value, kind), None
     if isinstance(value, (list, tuple, range)):
         if isinstance(value, tuple) and len(value) == 2 and isinstance(value[1], str):
             if not isinstance(value[0], str):
@@ -305,23 +259,10 @@ def _any(value: Any, kind: Kind, depth: int = 0) -> tuple[Any, Asked | None]:
             if not value[1].strip()[:1].isdigit():
                 raise bad_form("its number is text", kind, "Write the number without quotes")
         return _sequence(value, kind, depth)
-    if _is_series(value):
-        return _series(value, kind), None
+    if is_series(value):
+        return float_series(value, kind), None
     raise bad_form(f"a {type(value).__name__} is no number", kind,
                "Pass a float or a numpy array in SI, or (numbers, 'unit')")  # fmt: skip
-
-
-def _shown(value: Any) -> str:
-    try:
-        text = " ".join(repr(value).split())
-    except Exception:  # a foreign object may fail to show itself
-        text = f"<{type(value).__name__}>"
-    return text if len(text) <= 60 else f"{text[:57]}..."
-
-
-def _named(name: str, value: Any, error: BadInput) -> NoReturn:
-    what = f"{name} = {_shown(value)}: {error.what}"
-    raise type(error)(what, allowed=error.allowed, choices=error.choices, hint=error.hint) from None
 
 
 # --- the three doors -----------------------------------------------------------------------
@@ -384,9 +325,9 @@ def read(
         try:
             si, asked = _any(value, its)
         except BadInput as error:
-            _named(name, value, error)
+            named(name, value, error)
     plain: Any = si
-    if type(si) is not float and _is_series(si):
+    if type(si) is not float and is_series(si):
         plain = si.to_numpy()
     if not inside(plain, limit):
         check_domain_of(name, plain, its, limit, asked is None)
@@ -449,7 +390,7 @@ def give(si: Any, kind: str | Kind, asked: Asked | None) -> Any:
     if asked is None:
         return si
     its = kind if isinstance(kind, Kind) else kind_of(kind)[0]
-    if its.plain or _is_series(si):
+    if its.plain or is_series(si):
         return si
     registry = asked.registry or _application()
     scale, label = _stock(its)

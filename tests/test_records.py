@@ -413,6 +413,9 @@ def test_summaries_and_pairs_come_from_the_index(store: Store) -> None:
     assert records.summaries()["gamma"]["kind"] == "solute"
     assert records.pairs() == {("alpha", "beta"): {"density": "measured", "viscosity": "single"}}
     assert store._liquids == {}
+    names: Any = records.index()
+    with pytest.raises(TypeError):
+        names["alpha"] = "beta"
 
 
 def test_a_file_that_the_index_lacks_is_found(folder: Path) -> None:

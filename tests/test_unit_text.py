@@ -320,7 +320,7 @@ REFUSED = [
     ("1,500 um", "length", BadInput, ["'1.500 um'", "thousands", "'1500 um'"]),
     ("1 500 um", "length", BadInput, ["two numbers", "'1000 um'"]),
     ("1_500 um", "length", BadInput, ["two numbers"]),
-    ("2² m", "length", BadInput, ["two numbers"]),
+    ("2² m", "length", UnitError, ["cannot be read"]),
     ("um", "length", BadInput, ["does not start with a number", "'60 um'"]),
     ("", "length", BadInput, ["does not start with a number"]),
     ("nan um", "length", BadInput, ["does not start with a number"]),

@@ -45,6 +45,8 @@ class Entry:
         What it compares, in one line.
     arguments : tuple of str
         Names of the arguments, in order.
+    optional : tuple of str
+        Those of them that may be left out.
     scale : str
         The length that it is built on; empty where there is none.
     returns : str
@@ -59,6 +61,7 @@ class Entry:
     symbol: str
     compares: str
     arguments: tuple[str, ...]
+    optional: tuple[str, ...]
     scale: str
     returns: str
     limits: tuple[Limit, ...]
@@ -75,7 +78,9 @@ def _entry(name: str, theme: str, number: Boundary[..., Any]) -> Entry:
     doc = number.__doc__ or ""
     title = _TITLE.match(doc)
     texts = {found["name"]: " ".join(found["text"].split()) for found in _PARAMETER.finditer(doc)}
-    arguments = tuple(inspect.signature(number).parameters)
+    parameters = inspect.signature(number).parameters
+    arguments = tuple(parameters)
+    optional = tuple(w for w, one in parameters.items() if one.default is not one.empty)
     size = next((size for size in _SIZES if size in arguments), "")
     return Entry(
         name=name,
@@ -84,6 +89,7 @@ def _entry(name: str, theme: str, number: Boundary[..., Any]) -> Entry:
         symbol=title["symbol"] if title else "",
         compares=title["compares"] if title else "",
         arguments=arguments,
+        optional=optional,
         scale=texts.get(size, ""),
         returns=number.returns,
         limits=tuple(limit for limit in LIMITS if limit.number == name),

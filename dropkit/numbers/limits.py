@@ -140,7 +140,8 @@ LIMITS: Final[tuple[Limit, ...]] = (
         _DROP,
         "Guildenbecher2009",
         "text",
-        "Boundaries differ between authors by up to 2 times; the first is 11 +- 2.",
+        "Boundaries differ between authors by up to 2 times; the first is 11 +- 2, by others "
+        "12 (1 + 1.077 Oh^1.6).",
     ),
     Limit(
         "splash_parameter",

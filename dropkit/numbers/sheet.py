@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-import inspect
 from collections.abc import Callable
 from typing import Any, Final
 
@@ -153,14 +152,10 @@ def _form(
     """Add a row, or what the number lacks."""
     function = entry.function
     key = entry.name if fluid == "liquid" else f"{entry.name} (gas)"
-    signature = inspect.signature(function)
-    optional = {
-        word
-        for word, parameter in signature.parameters.items()
-        if parameter.default is not parameter.empty
-    }
     found = {word: find(word) for word in entry.arguments}
-    lacking = [word for word, value in found.items() if value is None and word not in optional]
+    lacking = [
+        word for word, value in found.items() if value is None and word not in entry.optional
+    ]
     if lacking:
         missing[key] = f"needs {', '.join(lacking)}"
         return

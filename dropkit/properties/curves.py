@@ -78,16 +78,21 @@ class Curve:
     def _first_that_holds(self, temperature: float) -> float:
         return self._scalars[self.serving(temperature)](temperature)
 
+    def serve(self, temperature: FloatArray) -> np.ndarray[Any, np.dtype[np.intp]]:
+        """Index of the record that serves each of some temperatures [K]."""
+        # Between two neighbouring ends one record serves throughout.
+        place = np.searchsorted(self._ends, temperature)
+        number: np.ndarray[Any, np.dtype[np.intp]] = self._between[place]
+        at_end = self._ends[np.minimum(place, self._ends.size - 1)] == temperature
+        number[at_end] = self._at_end[place[at_end]]
+        return number
+
     def fill(self, temperature: FloatArray, out: FloatArray) -> None:
         """Write the property at `temperature` [K], a flat float array, into `out` in place."""
         if len(self.ranges) == 1:
             self._arrays[0](temperature, out)
             return
-        # Between two neighbouring ends one record serves throughout.
-        place = np.searchsorted(self._ends, temperature)
-        number = self._between[place]
-        at_end = self._ends[np.minimum(place, self._ends.size - 1)] == temperature
-        number[at_end] = self._at_end[place[at_end]]
+        number = self.serve(temperature)
         for index, write in enumerate(self._arrays):
             chosen = np.flatnonzero(number == index)
             if chosen.size == out.size:

@@ -85,7 +85,8 @@ def _fluid_rows(fluid: Fluid) -> list[tuple[str, ...]]:
         value = fluid._evaluate(prop, ROOM, "nan") if inside else None
         shown = "" if value is None else number(in_stock(prop, value))
         span = f"{limits.low - 273.15:.4g} to {limits.high - 273.15:.4g} degC"
-        rows.append((prop, shown, unit_of(prop), fluid.grade(prop), span))
+        grade = fluid._trail(prop, ROOM if inside else None).grade
+        rows.append((prop, shown, unit_of(prop), grade, span))
     return rows
 
 

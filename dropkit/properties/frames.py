@@ -30,7 +30,7 @@ from dropkit.properties.composition import (
 from dropkit.properties.curves import FloatArray
 from dropkit.properties.interface import GRADED, property_name
 from dropkit.properties.mixtures import Mixture
-from dropkit.provenance import Grade, worst_grade
+from dropkit.provenance import GRADES
 from dropkit.validity import Outside, check_outside
 
 if TYPE_CHECKING:
@@ -103,7 +103,7 @@ def lookup(
     table = _Table(frame, by, rest)
     size = len(frame)
     values = {prop: np.full(size, np.nan) for prop in wanted}
-    grades: list[Grade | str] = [""] * size
+    grades = np.full(size, "", dtype=object)
     reasons = table.reasons
     for rows, fluid in table.groups():
         _fill_group(rows, fluid, table.temperature, wanted, outside, values, grades, reasons)
@@ -124,11 +124,11 @@ def _fill_group(
     wanted: Sequence[str],
     outside: Outside,
     values: Mapping[str, FloatArray],
-    grades: list[Any],
+    grades: Any,
     reasons: list[str],
 ) -> None:
     kelvin = temperature[rows]
-    found: list[Grade] = []
+    codes = np.zeros(rows.size, dtype=int)
     for prop in wanted:
         try:
             got = np.asarray(fluid._evaluate(prop, kelvin, outside))
@@ -138,15 +138,12 @@ def _fill_group(
                 reasons[row] = _join(reasons[row], str(problem))
             continue
         values[prop][rows] = got
-        found.append(fluid._trail(prop, None).grade)
+        codes = np.maximum(codes, fluid.grade_codes(prop, kelvin))
         for row in rows[np.isnan(got)]:
             inside = limits.low <= temperature[row] <= limits.high
             why = "composition out of range" if inside else f"temperature outside {limits}"
             reasons[row] = _join(reasons[row], f"{prop}: {why}")
-    if found:
-        grade = worst_grade(found)
-        for row in rows:
-            grades[row] = grade
+    grades[rows] = np.array(GRADES, dtype=object)[codes]
 
 
 def _join(before: str, more: str) -> str:
@@ -206,7 +203,9 @@ class _Table:
             kelvin = numbers
         else:
             self.with_units = True
-            kelvin = np.asarray(units.to_si((numbers, unit), "temperature", str(column.name), domain="any"))
+            kelvin = np.asarray(
+                units.to_si((numbers, unit), "temperature", str(column.name), domain="any")
+            )
         for row in np.flatnonzero(kelvin <= 0.0):
             self.reasons[row] = "temperature at or below 0 K"
         self.temperature = np.where(kelvin > 0.0, kelvin, np.nan)

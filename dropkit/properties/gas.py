@@ -72,7 +72,6 @@ def air(
     18.21
     """
     check_outside(outside)
-    bare = isinstance(temperature, (int, float)) and temperature < 150.0
     try:
         t, asked_t = units.read(temperature, "temperature", "temperature")
     except Unphysical as error:
@@ -92,31 +91,27 @@ def air(
             ) from None
     asked = next((one for one in (asked_t, asked_p, asked_h) if one and one.registry), None)
     asked = asked or asked_t or asked_p or asked_h
+    bare = asked_t is None and np.any(np.less(t, 150.0))
     mask = settle("air", t, TEMPERATURE, outside, hint=_KELVIN if bare else "")
     mask = mask | settle("air", p, PRESSURE, outside)
-    wet = (
-        np.where(h > 0.0, t, HUMID.low)
-        if isinstance(t, np.ndarray)
-        else t
-        if h > 0.0
-        else HUMID.low
-    )
+    wet = np.where(np.greater(h, 0.0), t, HUMID.low)[()]
     mask = mask | settle(
         "air", wet, HUMID, outside, hint="Relative humidity is defined here up to 100 degC"
     )
     mask = mask | (t < _FLOOR)
-    x = _water(t, p, h, outside)
-    if np.any(mask):  # under "nan": NaN in everything that follows
-        x = np.where(mask, np.nan, x)
-        x = x if isinstance(t, np.ndarray) else float(x)
+    x = _water(t, p, h, mask, outside)
     return Air((t, p, x), h, asked, outside, index)
 
 
-def _water(t: Any, p: Any, h: Any, outside: str) -> Any:
-    """Mole fraction of water; Unphysical where it would pass 1."""
+def _water(t: Any, p: Any, h: Any, mask: Any, outside: str) -> Any:
+    """Mole fraction of water; NaN under the mask, Unphysical where it would pass 1."""
+    # Numpy's own numbers: Python's floats would raise where these give infinity.
+    kelvin, pascal = np.asarray(t)[()], np.asarray(p)[()]
     with np.errstate(all="ignore"):
-        x = h * humid_air.enhancement_factor(t, p) * humid_air.saturation_pressure(t) / p
-    x = np.where(np.equal(h, 0.0), 0.0 * t * p, x)
+        saturated = humid_air.enhancement_factor(kelvin, pascal)
+        saturated = saturated * humid_air.saturation_pressure(kelvin) / pascal
+        x = np.where(np.equal(h, 0.0), 0.0, h * saturated)
+    x = np.where(mask | np.isnan(t) | np.isnan(p) | np.isnan(h), np.nan, x)
     too_wet = x > 1.0
     if np.any(too_wet):
         if outside != "nan":

@@ -163,8 +163,10 @@ class Air:
                 raise MissingProperty(
                     "dry air has no dew point", hint="Give a humidity above zero to dropkit.air"
                 )
+        # Numpy's own numbers: Python's floats would raise where these give infinity.
+        exact = _Point(*(np.asarray(value)[()] for value in at))
         with np.errstate(all="ignore"):
-            value = np.asarray(_COMPUTE[prop](at), dtype=np.float64)
+            value = np.asarray(_COMPUTE[prop](exact), dtype=np.float64)
         good = np.isfinite(value) & (value >= 0.0 if prop in _MAY_VANISH else value > 0.0)
         lost = int(np.count_nonzero(~good & known & ~np.asarray(mask)))
         if lost:

@@ -117,12 +117,8 @@ class Fluid:
             hint=f"If you have measured it, add it: with_values({prop}=...)",
         )
 
-    def _rejected(self, prop: str) -> Any:
-        """Mask of compositions outside their range (False where there is none)."""
-        return False
-
-    def _settle_composition(self, prop: str, outside: str) -> Any:
-        """Apply the range policy to the composition; returns the mask that becomes NaN."""
+    def _settle_point(self, prop: str, temperature: Any, outside: str) -> Any:
+        """Apply the range policy to composition and temperature together; the mask for NaN."""
         return False
 
     # ------------------------------------------------ evaluation
@@ -164,7 +160,7 @@ class Fluid:
         lowest = np.fmin.reduce(np.ravel(temperature), initial=np.inf)
         hint = KELVIN_HINT if lowest < 150.0 and limits.low > 150.0 else ""
         lost = settle(f"{prop} of {self.name}", temperature, limits, outside, hint=hint)
-        unfit = self._settle_composition(prop, outside)
+        unfit = self._settle_point(prop, temperature, outside)
         if not isinstance(temperature, np.ndarray) and self._shape() == ():
             return self._one(prop, temperature, limits, lost or unfit)
         return self._many(prop, temperature, limits, lost, unfit)

@@ -9,7 +9,15 @@ from typing import Any, Final, Literal
 import numpy as np
 
 from dropkit import records
-from dropkit.errors import BadInput, EstimateRefused, EstimateWarning, MissingProperty, NotALiquid
+from dropkit.errors import (
+    BadInput,
+    EstimateRefused,
+    EstimateWarning,
+    MissingProperty,
+    NotALiquid,
+    OutOfRange,
+    RangeWarning,
+)
 from dropkit.properties import display
 from dropkit.properties.composition import (
     Composition,
@@ -28,7 +36,7 @@ from dropkit.properties.pure import (
     relative_uncertainty,
     versions,
 )
-from dropkit.provenance import Trail, worst_grade
+from dropkit.provenance import GRADES, Trail, worst_grade
 from dropkit.validity import Range, settle
 
 __all__ = ["Mixture", "mixture"]
@@ -138,6 +146,17 @@ class Mixture(Fluid):
     def __reduce__(self) -> tuple[Any, ...]:
         return (_rebuild, (self._composition, self._estimates))
 
+    def grade_codes(self, prop: str, temperature: FloatArray) -> Any:
+        """Place in `GRADES` at each point of an array of temperatures; for dropkit's layers."""
+        if prop == "kinematic_viscosity":
+            codes = [self.grade_codes(name, temperature) for name in ("viscosity", "density")]
+            return np.maximum(*codes)
+        if self._pure is not None:
+            curve = self._pure.curve(prop)
+            grades = np.array([GRADES.index(block.grade) for block in curve.records])
+            return grades[curve.serve(temperature)]
+        return self._need(prop).grade_codes(self._mass, temperature)
+
     def _title(self, entries: list[records.LiquidRecord]) -> str:
         parts = []
         for entry, w in zip(entries, self._mass, strict=True):
@@ -233,7 +252,7 @@ class Mixture(Fluid):
             try:
                 found: Blend | MissingProperty = blend(prop, self._keys)
                 assert isinstance(found, Blend)
-                _ = found.range
+                found.range(self._mass)
             except MissingProperty as problem:
                 found = problem
             if isinstance(found, Blend) and found.estimated and self._estimates == "refuse":
@@ -279,7 +298,7 @@ class Mixture(Fluid):
         if prop == "kinematic_viscosity":
             density, viscosity = self._range("density"), self._range("viscosity")
             return Range(max(density.low, viscosity.low), min(density.high, viscosity.high))
-        return self._need(prop).range
+        return self._need(prop).range(self._mass)
 
     def _shape(self) -> tuple[int, ...]:
         return self._composition.shape
@@ -315,21 +334,38 @@ class Mixture(Fluid):
         mass = [w[part] if np.ndim(w) else w for w in self._mass]
         self._need(prop).fill(mass, temperature, out)
 
-    def _settle_composition(self, prop: str, outside: str) -> Any:
+    def _settle_point(self, prop: str, temperature: Any, outside: str) -> Any:
         if self._pure is not None:
             return False
         if prop == "kinematic_viscosity":
-            gone = self._settle_composition("density", outside)
-            return gone | self._settle_composition("viscosity", outside)
+            gone = self._settle_point("density", temperature, outside)
+            return gone | self._settle_point("viscosity", temperature, outside)
+        rule = self._need(prop)
+        subject = f"{prop} of {self.name}"
         mask: Any = False
-        for top, bottom, limits, _ in self._need(prop).limits():
-            if limits.low <= 0.0 and limits.high >= 1.0:
-                continue
-            total = np.asarray(sum(self._mass[i] for i in bottom), dtype=float)
-            share = np.full(total.shape, np.nan)
-            np.divide(sum(self._mass[i] for i in top), total, out=share, where=total > 0.0)
-            value: Any = share if share.ndim else float(share)
-            mask = mask | settle(f"{prop} of {self.name}", value, limits, outside)
+        for share, limits in rule.composition_limits(self._mass):
+            if limits.low > 0.0 or limits.high < 1.0:
+                mask = mask | settle(subject, share, limits, outside)
+        unserved = rule.unserved(self._mass, temperature) & ~np.asarray(mask)
+        if not np.any(unserved) or outside == "allow":
+            return mask
+        if outside == "nan":
+            return mask | unserved
+        kelvin = np.broadcast_to(temperature, np.shape(unserved))[unserved]
+        what = (
+            f"{subject}: no record holds {int(np.sum(unserved))} of {np.size(unserved)} points "
+            f"of temperature and composition, the first at {kelvin.flat[0]:g} K"
+        )
+        if outside == "raise":
+            raise OutOfRange(
+                what,
+                allowed="; ".join(
+                    f"{block.range} at mass fractions {low:g} to {high:g} of {rule_first}"
+                    for rule_first, block, low, high in rule.cells()
+                ),
+                hint="outside='warn', 'nan' or 'allow' changes what happens",
+            )
+        warnings.warn(what, RangeWarning, stacklevel=5)
         return mask
 
     def _trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
@@ -338,7 +374,7 @@ class Mixture(Fluid):
         if prop == "kinematic_viscosity":
             return quotient_trail(self, temperature)
         rule = self._need(prop)
-        used = [curve.records[0] for curve in rule.curves] + rule.blocks
+        used = rule.serving(self._mass, temperature)
         grades = [block.grade for block in used]
         if rule.estimated:
             grades.append("estimated")
@@ -395,13 +431,13 @@ class Mixture(Fluid):
         if temperature is not None:
             found = np.asarray(self._evaluate(prop, temperature, "nan"))
             value = float(np.nanmin(found)) if np.isfinite(found).any() else None
-        shares = [float(np.max(x)) for x in rule._fractions(self._mass)]
-        ends = sum(
-            share * relative_uncertainty(curve.records[0], value)
-            for share, curve in zip(shares, rule.curves, strict=True)
-        )
-        pairs = max((relative_uncertainty(block, value) for block in rule.blocks), default=0.0)
-        return float(np.hypot(max(ends, pairs), rule.estimate_error))
+        used = rule.serving(self._mass, temperature)
+        known = {id(block): relative_uncertainty(block, value) for block in used}
+        shares = [float(np.max(x)) for x in rule.fractions(self._mass)]
+        ends = 0.0
+        for share, curve in zip(shares, rule.curves, strict=True):
+            ends += share * max(known.pop(id(block), 0.0) for block in curve.records)
+        return float(np.hypot(max(ends, *known.values(), 0.0), rule.estimate_error))
 
     # ------------------------------------------------ display
     def __repr__(self) -> str:

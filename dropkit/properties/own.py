@@ -292,15 +292,15 @@ class OwnFluid(Fluid):
             if route == "trend":
                 out *= self._trends[prop]
 
-    def _settle_composition(self, prop: str, outside: str) -> Any:
+    def _settle_point(self, prop: str, temperature: Any, outside: str) -> Any:
         route = self._route(prop)
         if route == "own" or self._base is None:
             return False
         if route in ("product", "quotient"):
             first, second = self._parts(prop)
-            mask = self._settle_composition(first, outside)
-            return mask | self._settle_composition(second, outside)
-        return self._base._settle_composition(prop, outside)
+            mask = self._settle_point(first, temperature, outside)
+            return mask | self._settle_point(second, temperature, outside)
+        return self._base._settle_point(prop, temperature, outside)
 
     def _trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
         route = self._route(prop)

@@ -65,6 +65,7 @@ class State:
         self.name = fluid.name if fluid is not None else name
         self._values: dict[str, Any] = {}
         self._trails: dict[str, Trail] = {}
+        self._reasons: dict[str, str] = {}
         self._cautions: tuple[str, ...] | None = None
 
     # ------------------------------------------------ how it was asked
@@ -84,7 +85,8 @@ class State:
             outside=self._outside,
             name=self.name,
         )
-        twin._values, twin._trails, twin._cautions = self._values, self._trails, self._cautions
+        twin._values, twin._trails = self._values, self._trails
+        twin._reasons, twin._cautions = self._reasons, self._cautions
         return twin
 
     def _give(self, kind: str, value: Any) -> Any:
@@ -219,7 +221,11 @@ class State:
 
     def _given(self) -> Iterator[tuple[str, Any, Trail | None, str]]:
         """Property, value [SI], trail, and the reason where it can't be given here."""
-        for prop in self.available():
+        for prop in PROPERTIES:
+            if prop in self._reasons:
+                yield prop, float("nan"), None, self._reasons[prop]
+            if prop not in self.available():
+                continue
             try:
                 yield prop, self._si(prop), self.trail(prop), ""
             except (ValueError, LookupError) as problem:
@@ -305,9 +311,11 @@ class State:
 
     def to_dict(self) -> dict[str, Any]:
         """A dict of plain types that survives JSON; `from_dict` rebuilds the state."""
-        values, trails = {}, {}
-        for prop, value, trail, _ in self._given():
-            if trail is not None:
+        values, trails, reasons = {}, {}, {}
+        for prop, value, trail, reason in self._given():
+            if trail is None:
+                reasons[prop] = reason
+            else:
                 values[prop] = _plain(value)
                 trails[prop] = trail.to_dict()
         return {
@@ -317,6 +325,7 @@ class State:
             "with_units": self._with_units,
             "values": values,
             "trails": trails,
+            "reasons": reasons,
             "cautions": list(self.cautions),
         }
 
@@ -330,6 +339,7 @@ class State:
         )
         state._values = {prop: _array(value) for prop, value in data["values"].items()}
         state._trails = {prop: Trail.from_dict(entry) for prop, entry in data["trails"].items()}
+        state._reasons = dict(data["reasons"])
         state._cautions = tuple(data["cautions"])
         return state
 

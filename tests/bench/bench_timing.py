@@ -51,26 +51,37 @@ def per_call(call: Callable[[Any], Any], arguments: Iterable[Any], rounds: int =
 
 
 STARTS = """
-from time import perf_counter as now
-import numpy
+from time import perf_counter, process_time
+def now():
+    return perf_counter(), process_time()
 a = now()
-import dropkit as dk
+import numpy
 b = now()
-dk.liquid("water").viscosity(305.15)
+import dropkit as dk
 c = now()
-dk.liquid("water").viscosity("32 degC")
+dk.liquid("water").viscosity(305.15)
 d = now()
-print(b - a, c - b, d - c)
+dk.liquid("water").viscosity("32 degC")
+e = now()
+for begun, ended in ((a, b), (b, c), (c, d), (d, e)):
+    print(ended[0] - begun[0], ended[1] - begun[1])
 """
 
 
-def start_costs(runs: int = 9) -> tuple[float, float, float]:
-    """Median seconds of import over numpy, first SI look-up, first unit string; new processes."""
+def start_costs(runs: int = 9) -> list[tuple[float, float]]:
+    """Median seconds by the clock and of the processor, each step in new processes.
+
+    The steps: numpy, dropkit on top, the first SI look-up, the first unit string. On a busy
+    machine the processor's time says more.
+    """
     results = []
     for _ in range(runs + 1):
         run = subprocess.run(
             [sys.executable, "-c", STARTS], capture_output=True, text=True, check=True
         )
-        results.append([float(word) for word in run.stdout.split()])
-    first, second, third = zip(*results[1:], strict=True)  # the first run compiles the modules
-    return statistics.median(first), statistics.median(second), statistics.median(third)
+        results.append([tuple(map(float, line.split())) for line in run.stdout.splitlines()])
+    steps = zip(*results[1:], strict=True)  # the first run compiles the modules
+    return [
+        (statistics.median(a for a, _ in step), statistics.median(b for _, b in step))
+        for step in steps
+    ]

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import re
 import subprocess
 import sys
 from pathlib import Path
@@ -156,3 +157,26 @@ def test_without_docstrings_names_and_arguments_remain() -> None:
 def test_a_misspelt_name_is_an_attribute_error() -> None:
     with pytest.raises(AttributeError, match="webber"):
         _ = numbers.webber  # type: ignore[attr-defined] # misspelt on purpose
+
+
+PAGE = (Path(__file__).parents[2] / "docs" / "numbers.md").read_text(encoding="utf-8")
+
+
+@every_number
+def test_the_page_of_the_docs_says_the_same(entry: Entry) -> None:
+    formula = re.search(r"Notes\n\s+-+\n\s+``(.+?)``", entry.function.__doc__ or "", re.DOTALL)
+    assert formula
+    size = next((s for s in ("length", "radius") if s in entry.arguments), "-")
+    row = (
+        f"| `{entry.name}` | `{' '.join(formula[1].split())}` | {entry.compares} "
+        f"| {size.replace('length', 'diameter')} |"
+    )
+    assert row in PAGE
+
+
+def test_the_page_of_the_docs_has_every_limit() -> None:
+    from dropkit.numbers.limits import LIMITS
+
+    for limit in LIMITS:
+        bounds = ", ".join(f"{bound:.4g}" for bound in limit.bounds)
+        assert f"| `{limit.number}` | {bounds} | {'; '.join(limit.sides)} |" in PAGE

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 import json
 import pickle
+import warnings
 from typing import Any
 
 import numpy as np
@@ -16,6 +17,7 @@ import dropkit as dk
 from dropkit.errors import (
     BadInput,
     DropkitError,
+    DropkitWarning,
     MissingProperty,
     OutOfRange,
     RangeWarning,
@@ -102,6 +104,7 @@ def test_nan_gives_nan() -> None:
         ({"temperature": 400.0, "humidity": 0.1}, "humid air"),
         ({"temperature": [290.0, 500.0]}, "1 of 2"),
         ({"temperature": 25.0}, "kelvin expected"),
+        ({"temperature": [25.0, 30.0]}, "kelvin expected"),
     ],
 )
 def test_outside_its_ranges(case: dict[str, Any], words: str) -> None:
@@ -272,10 +275,14 @@ anything = st.one_of(
 
 @given(anything, anything, anything, st.sampled_from(["raise", "nan", "allow"]))
 def test_only_own_exceptions(t: Any, p: Any, h: Any, outside: Any) -> None:
-    try:
-        made = dk.air(t, p, h, outside=outside)
-    except DropkitError:
-        return
-    for prop in ("density", "viscosity", "water_mole_fraction"):
-        value = getattr(made, prop)
+    with warnings.catch_warnings(record=True) as caught:
+        warnings.simplefilter("always")
+        try:
+            made = dk.air(t, p, h, outside=outside)
+        except DropkitError:
+            return
+        values = [made.density, made.viscosity, made.mean_free_path, made.water_mole_fraction]
+    assert all(issubclass(warning.category, DropkitWarning) for warning in caught)
+    assert outside == "allow" or not caught
+    for value in values:
         assert not np.isinf(np.asarray(getattr(value, "magnitude", value))).any()

@@ -9,19 +9,20 @@ from pathlib import Path
 import pytest
 
 ROOT = Path(__file__).parents[2]
-MADE = {".git", ".venv", "__pycache__", "dist", "build", "node_modules"}
 TEXT = {".py", ".md", ".toml", ".csv", ".json", ".cfg", ".txt", ".sh", ""}
+
+
+def is_made(part: str) -> bool:
+    """Whether a folder is made by tools, such as .venv, dist or a cache, and no part of the source."""
+    return (part.startswith(".") and part != ".ci") or part in ("__pycache__", "dist")
+
 
 FILES = [
     path
     for path in sorted(ROOT.rglob("*"))
     if path.is_file()
     and path.suffix in TEXT
-    and not MADE & set(path.relative_to(ROOT).parts[:1])
-    and not any(
-        part in MADE - {"build"} or part.endswith("_cache") or part.endswith(".egg-info")
-        for part in path.relative_to(ROOT).parts
-    )
+    and not any(map(is_made, path.relative_to(ROOT).parts[:-1]))
 ]
 
 # Written in pieces, or this file would find itself.

@@ -105,7 +105,7 @@ def _one_family(
     lowest = min(n for _, n in terms)
     steps = [n - lowest for _, n in terms]
     whole = [round(step) for step in steps]
-    if max(whole) > 8 or any(abs(a - b) > 1e-9 for a, b in zip(steps, whole, strict=True)):
+    if max(whole) > 8 or any(abs(a - b) > 1e-14 for a, b in zip(steps, whole, strict=True)):
         return None
     coefficients = [0.0] * (max(whole) + 1)
     for (s, _), step in zip(terms, whole, strict=True):

@@ -7,9 +7,10 @@ a record enters without excess, and the property is an estimate.
 from __future__ import annotations
 
 import tomllib
+from bisect import bisect_left
 from collections.abc import Callable, Sequence
 from functools import cache
-from itertools import combinations
+from itertools import combinations, pairwise
 from typing import Any, Final
 
 import numpy as np
@@ -19,12 +20,9 @@ from dropkit.errors import EstimateRefused, MissingProperty
 from dropkit.properties.composition import reference_density
 from dropkit.properties.curves import Curve, FloatArray
 from dropkit.properties.mixing import electrolytes
-from dropkit.properties.mixing.redlich_kister import (
-    RULES,
-    PairExcess,
-    collapse,
-    reduced_temperature,
-)
+from dropkit.properties.mixing.pair import Pair, share_of
+from dropkit.properties.mixing.redlich_kister import RULES, collapse, reduced_temperature
+from dropkit.provenance import GRADES
 from dropkit.records import LiquidRecord, PropertyRecord
 from dropkit.validity import Range
 
@@ -91,7 +89,7 @@ class Blend:
             1.0 / reference_density(keys[i]) if self.basis == "volume" else 1.0
             for i in self.solvents
         ]
-        self.pairs: list[tuple[int, int, PairExcess]] = []
+        self.pairs: list[Pair] = []
         self.unfitted: list[tuple[int, int]] = []
         for i, j in combinations(range(len(self.solvents)), 2):
             self._read_pair(i, j)
@@ -105,9 +103,9 @@ class Blend:
         if not blocks or found is None:
             self.unfitted.append((i, j))
         elif found.components[0] == a:
-            self.pairs.append((i, j, PairExcess(blocks[0])))
+            self.pairs.append(Pair(i, j, blocks))
         else:
-            self.pairs.append((j, i, PairExcess(blocks[0])))
+            self.pairs.append(Pair(j, i, blocks))
 
     def _read_salt(self, salt: LiquidRecord) -> PropertyRecord:
         found = records.pair_record(salt.key, "water")
@@ -121,7 +119,7 @@ class Blend:
             )
         return blocks[0]
 
-    def _read_caps(self) -> list[tuple[int, int, PairExcess]]:
+    def _read_caps(self) -> list[Pair]:
         """Aqueous pairs of amphiphiles: an estimate never exceeds the binary at the same ratio."""
         if self.property != "surface_tension":
             return []
@@ -132,7 +130,7 @@ class Blend:
         for i, entry in enumerate(self.records):
             if not entry.amphiphile or i == water:
                 continue
-            fitted = [pair for pair in self.pairs if {pair[0], pair[1]} == {i, water}]
+            fitted = [pair for pair in self.pairs if {pair.first, pair.second} == {i, water}]
             if not fitted:
                 raise EstimateRefused(
                     f"The surface tension of {entry.name} in water is not estimated: a little of "
@@ -149,23 +147,89 @@ class Blend:
         """Whether any pair enters without a record."""
         return bool(self.unfitted) or (bool(self.solutes) and len(self.solvents) > 1)
 
-    @property
-    def range(self) -> Range:
-        """Temperatures at which all that enters is within its range."""
-        low = max(curve.range.low for curve in self.curves)
-        high = min(curve.range.high for curve in self.curves)
-        for block in self.blocks:
-            low, high = max(low, block.range.low), min(high, block.range.high)
+    def range(self, mass: Sequence[Any]) -> Range:
+        """Temperatures that all that enters can serve, at one composition or an array of them."""
+        found = [curve.range for curve in self.curves]
+        found += [block.range for block in self.salts]
+        for pair in self.pairs:
+            share = self._share(pair, mass)
+            found.append(pair.range(None if isinstance(share, np.ndarray) else share))
+        low, high = max(limits.low for limits in found), min(limits.high for limits in found)
         if low > high:
             raise MissingProperty(
                 f"{self.property}: the ranges of the components have no temperature in common"
             )
         return Range(low, high)
 
-    @property
-    def blocks(self) -> list[PropertyRecord]:
-        """The records of pairs and salts."""
-        return [pair.record for _, _, pair in self.pairs] + self.salts
+    def _share(self, pair: Pair, mass: Sequence[Any]) -> Any:
+        """Mass share of a pair's first component in the two."""
+        return share_of(mass[self.solvents[pair.first]], mass[self.solvents[pair.second]])
+
+    def composition_limits(self, mass: Sequence[Any]) -> list[tuple[Any, Range]]:
+        """Shares of the pairs and of the salts, with the ranges that they must keep."""
+        found = []
+        for pair in self.pairs:
+            a, b = self.records[pair.first].name, self.records[pair.second].name
+            limits = pair.share_range(f"mass fraction of {a} in {a} + {b}")
+            found.append((self._share(pair, mass), limits))
+        for number, block in zip(self.solutes, self.salts, strict=True):
+            low, high = block.parameters.get("fraction_range", (0.0, 1.0))
+            name = f"mass fraction of {self.keys[number].replace('_', ' ')}"
+            total = sum(mass[i] for i in self.solutes)
+            found.append((total, Range(float(low), float(high), name, "")))
+        return found
+
+    def unserved(self, mass: Sequence[Any], temperature: Any) -> Any:
+        """Mask of the points that lie in no record of some pair, though in its outer ranges."""
+        kelvin = np.asarray(temperature, dtype=float)
+        mask: Any = False
+        for pair in self.pairs:
+            if len(pair.blocks) > 1:
+                mask = mask | (pair.serve(self._share(pair, mass), kelvin) < 0)
+        return mask & ~np.isnan(kelvin)
+
+    def serving(self, mass: Sequence[Any], temperature: Any) -> list[PropertyRecord]:
+        """The records that serve some temperatures (all of them for None) at a composition."""
+        kelvin = None if temperature is None else np.atleast_1d(np.asarray(temperature, float))
+        used: list[PropertyRecord] = []
+        for curve in self.curves:
+            served = None if kelvin is None else np.unique(curve.serve(kelvin))
+            used += [b for k, b in enumerate(curve.records) if served is None or k in served]
+        for pair in self.pairs:
+            share = self._share(pair, mass)
+            if kelvin is not None:
+                held = [k for k in np.unique(pair.serve(share, kelvin)) if k >= 0]
+            elif isinstance(share, np.ndarray):
+                held = []
+            else:
+                held = pair.holding(share)
+            used += [pair.blocks[k] for k in held] or list(pair.blocks)
+        return used + self.salts
+
+    def cells(self) -> list[tuple[str, PropertyRecord, float, float]]:
+        """Records of the pairs with the composition range of each: name of the first, record, ends."""
+        return [
+            (self.records[pair.first].name, block, low, high)
+            for pair in self.pairs
+            for block, (low, high) in zip(pair.blocks, pair.shares, strict=True)
+        ]
+
+    def grade_codes(self, mass: Sequence[Any], temperature: FloatArray) -> Any:
+        """Place in `GRADES` of the worst grade at each point of an array."""
+        codes = np.zeros(temperature.shape, dtype=int)
+        if self.estimated:
+            codes[:] = GRADES.index("estimated")
+            return codes
+        for curve in self.curves:
+            grades = np.array([GRADES.index(block.grade) for block in curve.records])
+            codes = np.maximum(codes, grades[curve.serve(temperature)])
+        for pair in self.pairs:
+            grades = np.array([GRADES.index(block.grade) for block in pair.blocks])
+            number = pair.serve(self._share(pair, mass), temperature)
+            codes = np.maximum(codes, grades[np.maximum(number, 0)])
+        for block in self.salts:
+            codes = np.maximum(codes, GRADES.index(block.grade))
+        return codes
 
     @property
     def estimate_error(self) -> float:
@@ -192,20 +256,8 @@ class Blend:
         parts += [f"{block.form} on the solvent" for block in self.salts]
         return "; ".join(parts)
 
-    def limits(self) -> list[tuple[tuple[int, ...], tuple[int, ...], Range, PropertyRecord]]:
-        """Composition limits: (numerator, denominator) component numbers, range, record."""
-        found: list[tuple[tuple[int, ...], tuple[int, ...], Range, PropertyRecord]] = []
-        for i, j, pair in self.pairs:
-            a, b = self.solvents[i], self.solvents[j]
-            found.append(((a,), (a, b), _fraction_range(pair.record, self.keys[a]), pair.record))
-        for number, block in zip(self.solutes, self.salts, strict=True):
-            everything = tuple(range(len(self.keys)))
-            limits = _fraction_range(block, self.keys[number])
-            found.append((tuple(self.solutes), everything, limits, block))
-        return found
-
     # ------------------------------------------------ one composition
-    def _fractions(self, mass: Sequence[Any]) -> list[Any]:
+    def fractions(self, mass: Sequence[Any]) -> list[Any]:
         """Solvents' fractions on the rule's basis, free of salts."""
         parts = [mass[i] * v for i, v in zip(self.solvents, self.inverse_density, strict=True)]
         total = sum(parts)
@@ -213,20 +265,76 @@ class Blend:
 
     def scalar(self, mass: Sequence[float]) -> Callable[[float], float]:
         """The property [SI] as a function of temperature [K] for one composition."""
-        fractions = self._fractions(mass)
+        fractions = self.fractions(mass)
         ends = [curve.scalar for curve in self.curves]
-        if len(ends) == 1:
-            value = ends[0]
+        shares = [self._share(pair, mass) for pair in self.pairs]
+        held = [pair.holding(x) or [0] for pair, x in zip(self.pairs, shares, strict=True)]
+        if all(len(numbers) == 1 for numbers in held):
+            value = self._fixed(fractions, ends, [numbers[0] for numbers in held])
         else:
-            excess = [p.at_composition(fractions[i], fractions[j]) for i, j, p in self.pairs]
-            value = collapse(self.transform, ends, fractions, excess)
-        for i, j, pair in self.caps:
-            total = fractions[i] + fractions[j]
-            if total > 0.0:
-                two = (fractions[i] / total, fractions[j] / total)
-                cap = collapse(self.transform, (ends[i], ends[j]), two, [pair.at_composition(*two)])
-                value = _lower(value, cap)
+            value = self._piecewise(fractions, ends, shares, held)
         return self._salted_scalar(value, mass) if self.salts else value
+
+    def _fixed(
+        self,
+        fractions: Sequence[float],
+        ends: Sequence[Callable[[float], float]],
+        numbers: Sequence[int],
+    ) -> Callable[[float], float]:
+        """The solvent's value at one composition, with one record chosen for each pair."""
+        if len(ends) == 1:
+            return ends[0]
+        chosen = [(pair, pair.excesses[k]) for pair, k in zip(self.pairs, numbers, strict=True)]
+        excess = [
+            entry.at_composition(fractions[pair.first], fractions[pair.second])
+            for pair, entry in chosen
+        ]
+        value = collapse(self.transform, ends, fractions, excess)
+        for pair, entry in chosen:
+            if pair in self.caps:
+                share = share_of(fractions[pair.first], fractions[pair.second])
+                two = (share, 1.0 - share)
+                parts = (ends[pair.first], ends[pair.second])
+                cap = collapse(self.transform, parts, two, [entry.at_composition(*two)])
+                value = _lower(value, cap)
+        return value
+
+    def _piecewise(
+        self,
+        fractions: Sequence[float],
+        ends: Sequence[Callable[[float], float]],
+        shares: Sequence[float],
+        held: Sequence[Sequence[int]],
+    ) -> Callable[[float], float]:
+        """The same where several records share the temperatures of some pair."""
+        limits = [
+            pair.blocks[k].range
+            for pair, numbers in zip(self.pairs, held, strict=True)
+            for k in numbers
+        ]
+        edges = sorted({end for found in limits for end in (found.low, found.high)})
+        middles = [0.5 * (a + b) for a, b in pairwise(edges)]
+        made: dict[tuple[int, ...], Callable[[float], float]] = {}
+
+        def serving(temperature: float) -> Callable[[float], float]:
+            numbers = tuple(
+                pair.serving(share, temperature)
+                for pair, share in zip(self.pairs, shares, strict=True)
+            )
+            if numbers not in made:
+                made[numbers] = self._fixed(fractions, ends, numbers)
+            return made[numbers]
+
+        between = [serving(t) for t in (edges[0] - 1.0, *middles, edges[-1] + 1.0)]
+        on_edge = dict(zip(edges, map(serving, edges), strict=True))
+
+        def value(temperature: float) -> float:
+            exact = on_edge.get(temperature)
+            if exact is not None:
+                return exact(temperature)
+            return between[bisect_left(edges, temperature)](temperature)
+
+        return value
 
     def _salted_scalar(
         self, solvent: Callable[[float], float], mass: Sequence[float]
@@ -279,51 +387,45 @@ class Blend:
         if len(ends) == 1:
             out[:] = ends[0]
         else:
-            fractions = self._fractions(mass)
+            fractions = self.fractions(mass)
             reduced = reduced_temperature(temperature)
             shaped = [_forward(self.transform, end) for end in ends]
-            binary = len(ends) == 2
-            _combine(self.transform, shaped, fractions, self.pairs, reduced, out, binary=binary)
-            for i, j, pair in self.caps:
-                total = fractions[i] + fractions[j]
-                present = np.asarray(total) > 0.0
-                share = np.ones(present.shape)
-                np.divide(fractions[i], total, out=share, where=present)
+            self._sum(fractions, shaped, self.pairs, mass, temperature, reduced, out)
+            for pair in self.caps:
+                i, j = pair.first, pair.second
+                share = share_of(fractions[i], fractions[j])
+                two: list[Any] = [0.0] * len(ends)
+                two[i], two[j] = share, 1.0 - share
                 cap = np.empty_like(out)
-                two = [share, 1.0 - share]
-                _combine(
-                    self.transform,
-                    [shaped[i], shaped[j]],
-                    two,
-                    [(0, 1, pair)],
-                    reduced,
-                    cap,
-                    binary=True,
-                )
+                self._sum(two, shaped, [pair], mass, temperature, reduced, cap)
+                present = np.asarray(fractions[i] + fractions[j]) > 0.0
                 np.minimum(out, cap, out=out, where=present)
         if self.salts:
             out[:] = self._salted(out, mass, temperature)
 
-
-def _combine(
-    transform: str,
-    shaped: Sequence[FloatArray],
-    fractions: Sequence[Any],
-    pairs: Sequence[tuple[int, int, PairExcess]],
-    reduced: FloatArray,
-    out: FloatArray,
-    *,
-    binary: bool,
-) -> None:
-    np.multiply(fractions[0], shaped[0], out=out)
-    for x, y in zip(fractions[1:], shaped[1:], strict=True):
-        out += x * y
-    for i, j, pair in pairs:
-        pair.add(fractions[i], fractions[j], reduced, out, binary=binary)
-    if transform == "log":
-        np.exp(out, out=out)
-    elif transform == "reciprocal":
-        np.reciprocal(out, out=out)
+    def _sum(
+        self,
+        fractions: Sequence[Any],
+        shaped: Sequence[FloatArray],
+        pairs: Sequence[Pair],
+        mass: Sequence[Any],
+        temperature: FloatArray,
+        reduced: FloatArray,
+        out: FloatArray,
+    ) -> None:
+        """Ideal part and excesses into `out`, on the rule's scale and back."""
+        np.multiply(fractions[0], shaped[0], out=out)
+        for x, y in zip(fractions[1:], shaped[1:], strict=True):
+            out += x * y
+        binary = len(fractions) == 2
+        for pair in pairs:
+            two = (fractions[pair.first], fractions[pair.second])
+            share = self._share(pair, mass)
+            pair.add(two, share, temperature, reduced, out, binary=binary)
+        if self.transform == "log":
+            np.exp(out, out=out)
+        elif self.transform == "reciprocal":
+            np.reciprocal(out, out=out)
 
 
 def _forward(transform: str, value: FloatArray) -> FloatArray:
@@ -338,8 +440,3 @@ def _lower(
     first: Callable[[float], float], second: Callable[[float], float]
 ) -> Callable[[float], float]:
     return lambda temperature: min(first(temperature), second(temperature))
-
-
-def _fraction_range(block: PropertyRecord, key: str) -> Range:
-    low, high = block.parameters.get("fraction_range", (0.0, 1.0))
-    return Range(float(low), float(high), f"mass fraction of {key}", "")
