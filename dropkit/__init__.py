@@ -5,7 +5,9 @@ from __future__ import annotations
 import importlib
 from typing import TYPE_CHECKING, Any
 
-__version__ = "0.1.0"
+from dropkit.version import VERSION
+
+__version__ = VERSION
 
 if TYPE_CHECKING:
     from dropkit import design, errors, models, numbers, plots
@@ -13,9 +15,9 @@ if TYPE_CHECKING:
     from dropkit.properties.comparison import compare
     from dropkit.properties.frames import grid, lookup
     from dropkit.properties.gas import air
-    from dropkit.properties.pure import liquid
     from dropkit.properties.mixtures import mixture
     from dropkit.properties.own import fluid
+    from dropkit.properties.pure import liquid
     from dropkit.provenance import cite
 
 # Public name -> module that holds it; a name whose value is None is a module of its own.

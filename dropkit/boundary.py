@@ -111,13 +111,15 @@ class Boundary(Generic[P, R]):
     @overload
     def __call__(self, *args: Any, **kwargs: Any) -> Any: ...
     def __call__(self, *args: Any, **kwargs: Any) -> Any:
+        """The result for any form of input."""
         return self._quick(*args, **kwargs)
 
     def __reduce__(self) -> str:
         return self.__qualname__
 
     def __repr__(self) -> str:
-        return f"<dropkit function {self.__module__}.{self.__qualname__}{self._signature}>"
+        # Short, because `help` cuts it; the types stand in the signature.
+        return f"{self.__name__}({', '.join(self._signature.parameters)})"
 
     def _long(self, given: dict[str, Any]) -> Any:
         """The call with everything that may come in; `given` holds every argument."""

@@ -8,7 +8,6 @@ what to do next. Each class is also the natural built-in exception, so that
 from __future__ import annotations
 
 from collections.abc import Iterable, Sequence
-from difflib import get_close_matches
 
 __all__ = [
     "AmbiguousName",
@@ -42,6 +41,9 @@ def nearest(word: str, choices: Iterable[str], count: int = 3) -> list[str]:
     >>> nearest("glicerol", ["glycerol", "water"])
     ['glycerol']
     """
+    # Imported here: only a slip needs it.
+    from difflib import get_close_matches
+
     known = {choice.casefold(): choice for choice in choices}
     close = get_close_matches(word.casefold(), known, n=count, cutoff=0.6)
     return [known[name] for name in close]

@@ -11,7 +11,7 @@ from typing import Final
 
 from dropkit.errors import nearest
 from dropkit.record_store import Store, parse_file
-from dropkit.record_types import LiquidRecord, PairRecord, PropertyRecord
+from dropkit.record_types import LEADING, LiquidRecord, PairRecord, PropertyRecord
 
 __all__ = ["ARCHIVE", "independent", "problems", "publication", "second_sources", "source_keys"]
 
@@ -91,8 +91,10 @@ def second_sources(block: PropertyRecord) -> tuple[str, ...]:
 
 def _grade_problems(store: Store, block: PropertyRecord) -> Iterator[str]:
     own, second = list(block.sources), list(second_sources(block))
-    if block.grade in ("own", "estimated"):
-        yield f"grade '{block.grade}' is for results, not for data files"
+    if block.grade == "own":
+        yield "grade 'own' is for results, not for data files"
+    if block.grade == "estimated" and block.property in LEADING:
+        yield f"{block.property} is never estimated in a data file: leave it out"
     if block.grade == "measured":
         if not second:
             yield "grade 'measured' needs an independent check: second = { ... }"
@@ -106,10 +108,10 @@ def _grade_problems(store: Store, block: PropertyRecord) -> Iterator[str]:
                 "grade 'reference' needs one independent check: second, or a check point, of "
                 "a source that is independent of sources"
             )
-    if block.grade == "recalled":
+    if block.grade in ("recalled", "estimated"):
         if block.uncertainty < LEAST_RECALLED:
             yield (
-                f"grade 'recalled' needs an uncertainty of at least {LEAST_RECALLED}, "
+                f"grade '{block.grade}' needs an uncertainty of at least {LEAST_RECALLED}, "
                 f"not {block.uncertainty:g}"
             )
     else:

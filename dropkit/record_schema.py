@@ -7,7 +7,7 @@ from __future__ import annotations
 
 import math
 from collections.abc import Mapping
-from typing import Any, Final, cast
+from typing import Any, Final, NoReturn, TypeGuard, cast
 
 from dropkit.errors import RecordError, nearest
 from dropkit.provenance import GRADES, Grade, Source
@@ -66,7 +66,9 @@ class _Reader:
     def __init__(self, file: str, data: Mapping[str, Any], where: str = "") -> None:
         self.file, self.data, self.where = file, data, where
 
-    def fail(self, key: str, what: str, allowed: str = "", near: list[str] | None = None) -> Any:
+    def fail(
+        self, key: str, what: str, allowed: str = "", near: list[str] | None = None
+    ) -> NoReturn:
         place = f"{self.where}: {key}" if self.where else key
         command = f"python -m dropkit.records seal {self.file.removesuffix('.toml')}"
         raise RecordError(
@@ -82,7 +84,7 @@ class _Reader:
             self.fail(key, "is missing", "a text")
         if not isinstance(value, str) or (default is None and not value.strip()):
             self.fail(key, f"is {value!r}", "a text that is not empty")
-        return cast(str, value)
+        return value
 
     def texts(self, key: str) -> tuple[str, ...]:
         value = self.data.get(key, [])
@@ -134,13 +136,21 @@ class _Reader:
                 self.fail(key, "is not known here", ", ".join(keys), nearest(key, keys, 1))
 
 
+def _tables(value: Any) -> TypeGuard[list[Mapping[str, Any]]]:
+    return (
+        isinstance(value, list)
+        and len(value) > 0
+        and all(isinstance(entry, Mapping) for entry in value)
+    )
+
+
 def _above(lowest: float | None) -> str:
     return "" if lowest is None else f" above {lowest:g}"
 
 
 def _blocks(reader: _Reader, subject: str, name: str, *, pair: bool) -> tuple[PropertyRecord, ...]:
     blocks = reader.data[name]
-    if not isinstance(blocks, list) or not all(isinstance(block, Mapping) for block in blocks):
+    if not _tables(blocks):
         reader.fail(name, "is not a list of blocks", f"[[{name}]] with double brackets")
     return tuple(
         _block(
@@ -210,18 +220,18 @@ def _block(reader: _Reader, label: str, name: str, *, pair: bool) -> PropertyRec
 
 def _checks(reader: _Reader, limits: Range, *, pair: bool) -> tuple[Table, ...]:
     rows = reader.data.get("checks")
-    if not isinstance(rows, list) or not rows or not all(isinstance(r, Mapping) for r in rows):
+    if not _tables(rows):
         reader.fail("checks", "has no check point", "at least one { T, value, source, tolerance }")
     keys = ("T", "value", "source", "place", "tolerance")
     if pair:
         keys = (*keys, "fraction")
-    for number, row in enumerate(cast(list[Mapping[str, Any]], rows), 1):
+    for number, row in enumerate(rows, 1):
         check = _Reader(reader.file, row, f"{reader.where}: check {number}")
         check.only(keys)
         T = check.number("T", lowest=0.0)
         if not limits.holds(T):
             check.fail("T", f"is {T:g} K", f"inside the range, {limits}")
-        check.number("value")
+        check.number("value", lowest=0.0)
         check.number("tolerance", lowest=0.0)
         check.text("source")
         check.text("place", "")
@@ -229,7 +239,7 @@ def _checks(reader: _Reader, limits: Range, *, pair: bool) -> tuple[Table, ...]:
             fraction = check.number("fraction")
             if not 0 <= fraction <= 1:
                 check.fail("fraction", f"is {fraction:g}", "a mass fraction, 0 to 1")
-    return tuple(Table(row) for row in cast(list[Mapping[str, Any]], rows))
+    return tuple(map(Table, rows))
 
 
 def _second(reader: _Reader | None) -> Table | None:

@@ -10,7 +10,7 @@ from typing import Any, Final, NoReturn
 from dropkit.errors import BadInput, UnitError
 from dropkit.unit_table import KINDS, LENGTH, NONE, STANDARD_ATMOSPHERE, VISCOSITY, Dimension, Kind
 
-__all__ = ["bad_form", "mark_error", "mismatch", "named", "needs"]
+__all__ = ["bad_form", "mark_error", "mismatch", "named", "needs", "shown"]
 
 
 def bad_form(why: str, kind: Kind, hint: str = "") -> BadInput:
@@ -86,7 +86,8 @@ def mark_error(unit: str, mark: str, kind: Kind) -> UnitError:
     return UnitError(f"{unit!r} does not fit {kind.words}", allowed=needs(kind), hint=cure)
 
 
-def _shown(value: Any) -> str:
+def shown(value: Any) -> str:
+    """A value as it was given, in at most 60 characters."""
     try:
         text = " ".join(repr(value).split())
     except Exception:  # a foreign object may fail to show itself
@@ -96,5 +97,5 @@ def _shown(value: Any) -> str:
 
 def named(name: str, value: Any, error: BadInput) -> NoReturn:
     """Raise an error again with the argument and what it got in front."""
-    what = f"{name} = {_shown(value)}: {error.what}"
+    what = f"{name} = {shown(value)}: {error.what}"
     raise type(error)(what, allowed=error.allowed, choices=error.choices, hint=error.hint) from None

@@ -71,25 +71,34 @@ def inside(value: Any, domain: Domain) -> bool:
     return bool(low > -math.inf and high < math.inf)
 
 
-def check_domain_of(name: str, value: Any, kind: Kind, domain: Domain, bare: bool) -> None:
+def check_domain_of(name: str, value: Any, kind: Kind, domain: Domain, given: str) -> None:
+    """Raise Unphysical outside the domain, with the likely slip named.
+
+    `given` is how a value with a unit was written; empty for a bare one.
+    """
     try:
         check_domain(name, value, domain)
     except Unphysical as error:
         hint = ""
-        if kind.name == "temperature" and bare:
+        if kind.name == "temperature" and not given:
             hint = kelvin_hint(value)
         elif domain == "0..1":
             high = np.ravel(value)[np.ravel(value) > 1.0]
             if high.size and high[0] <= 100.0 and "percent" in kind.accepts:
                 hint = f"Per cent are written '{high[0]:g} %', a fraction {high[0] / 100:g}"
-        raise Unphysical(error.what, allowed=error.allowed, hint=hint) from None
+        unit = f" {kind.si}" if kind.si else ""
+        source = f" (given as {given})" if given else ""
+        what = error.what.replace(" (SI)", f"{unit}{source}")
+        raise Unphysical(what, allowed=error.allowed, hint=hint) from None
 
 
-def check_plausible(name: str, value: Any, kind: Kind, bare: bool) -> None:
+def check_plausible(name: str, value: Any, kind: Kind, given: str) -> None:
+    """Raise ImplausibleValue outside the kind's window, with the likely slip named."""
     if kind.plausible is None:
         return
     low, high = kind.plausible
-    if kind.name == "temperature" and bare:
+    cold = kind.name == "temperature" and not given
+    if cold:
         low = COLD
     flat = np.ravel(value)
     bad = flat[(flat < low) | (flat > high)]
@@ -98,7 +107,7 @@ def check_plausible(name: str, value: Any, kind: Kind, bare: bool) -> None:
     first = float(bad[0])
     count = f" ({bad.size} of {flat.size} elements)" if flat.size > 1 else ""
     hint = next((s.hint(first, kind.si) for s in kind.slips if s.low <= first <= s.high), "")
-    if kind.name == "temperature":
+    if cold:
         hint = kelvin_hint(first)
     raise ImplausibleValue(
         f"{name} = {first:g} {kind.si}".rstrip() + f"{count} is implausible for {kind.words}",

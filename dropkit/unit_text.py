@@ -45,7 +45,7 @@ _COMMA: Final = re.compile(r"([+-]?[0-9]*),([0-9]+)")
 _LETTER: Final = r"A-Za-zµμΩÅ°_"
 _TOKEN: Final = re.compile(
     rf"(?P<word>[{_LETTER}][{_LETTER}0-9]*?)(?:(?:\^|\*\*)?(?P<power>[+-]?[0-9]+))?(?![{_LETTER}0-9])"
-    r"|(?P<one>1(?![0-9.]))|(?P<sign>\*(?!\*)|[/().·⋅×])"
+    r"|(?P<one>1(?![0-9.]))|(?P<sign>\*(?!\*)|[/().·⋅×]|-(?=[A-Za-z]))"
 )
 _RUN_TOGETHER: Final = re.compile(r"([A-Za-z]+)([2-4])([A-Za-z]+)")  # "W/m2K"
 

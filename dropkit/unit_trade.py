@@ -115,6 +115,7 @@ SINGLE: Final[dict[str, tuple[Unit, str]]] = {
     "in": (Unit(_INCH, LENGTH), "inch"),
     "inch": (Unit(_INCH, LENGTH), "inch"),
     "ft": (Unit(12 * _INCH, LENGTH), "foot"),
+    "fpm": (Unit(12 * _INCH / 60, (1, 0, -1, 0, 0, 0)), ""),
     "mil": (Unit(_INCH / 1000, LENGTH), "thou"),
     "mils": (Unit(_INCH / 1000, LENGTH), "thou"),
     "thou": (Unit(_INCH / 1000, LENGTH), "thou"),
@@ -124,6 +125,7 @@ SINGLE: Final[dict[str, tuple[Unit, str]]] = {
     "angstrom": (Unit(Fraction(1, 10**10), LENGTH), "angstrom"),
     "cc": (Unit(Fraction(1, 10**6), VOLUME), ""),
     "cps": (Unit(_MILLI, VISCOSITY), "centipoise"),
+    "cPs": (Unit(_MILLI, VISCOSITY), "centipoise"),
     "dyn": (Unit(Fraction(1, 10**5), FORCE), "dyne"),
     "dyne": (Unit(Fraction(1, 10**5), FORCE), "dyne"),
     "dynes": (Unit(Fraction(1, 10**5), FORCE), "dyne"),
@@ -170,9 +172,9 @@ def _percent(mark: str) -> Unit:
 
 # Whole units, tried before anything is taken apart; a mark binds them to kinds.
 WHOLE: Final[dict[str, Unit]] = {
-    **dict.fromkeys(("°C", "degC", "deg C", "deg_C", "degree_Celsius", "celsius", "Celsius"),
+    **dict.fromkeys(("°C", "° C", "degC", "deg C", "deg. C", "degrees C", "deg_C", "degree_Celsius", "celsius", "Celsius"),
                     _CELSIUS),
-    **dict.fromkeys(("°F", "degF", "deg F", "deg_F", "degree_Fahrenheit", "fahrenheit",
+    **dict.fromkeys(("°F", "° F", "degF", "deg F", "deg. F", "degrees F", "deg_F", "degree_Fahrenheit", "fahrenheit",
                      "Fahrenheit"), _FAHRENHEIT),
     **dict.fromkeys(("degR", "°R", "deg R"), _RANKINE),
     **dict.fromkeys(("delta_degC", "delta_degree_Celsius", "Δ°C"), Unit(Fraction(1), TEMPERATURE, "difference")),
@@ -189,6 +191,9 @@ WHOLE: Final[dict[str, Unit]] = {
     **dict.fromkeys(("mm H2O", "mmWC"), SINGLE["mmH2O"][0]),
     **dict.fromkeys(("cm H2O", "cmWC"), SINGLE["cmH2O"][0]),
     **dict.fromkeys(("in H2O", "inWC", "in WC"), SINGLE["inH2O"][0]),
+    "PSI": SINGLE["psi"][0],
+    "PSIG": SINGLE["psi"][0]._replace(mark="gauge"),
+    "PSIA": SINGLE["psi"][0]._replace(mark="absolute"),
     "%": _percent("percent"),
     **dict.fromkeys(("wt%", "wt %", "wt.%", "wt. %", "mass%", "mass %", "% w/w", "%w/w"),
                     _percent("mass")),
@@ -225,6 +230,7 @@ REFUSED: Final[dict[str, str]] = {
     "C": "'degC' for degrees Celsius, 'coulomb' for a charge",
     "F": "'degF' for degrees Fahrenheit, 'farad' for a capacitance",
     "M": "'mol/L' for a molar concentration, 'm' for metres; as a prefix M is 10^6",
+    "u": "'um' for micrometres; 1 micron is 1 um",
     "oz": "'g' for a mass (1 ounce is 28.35 g), 'mL' for a volume (1 US fluid ounce is 29.57 mL)",
     "gal": "'US_gal' (3.785 L) or 'imp_gal' (4.546 L); 'gpm' is US gallons per minute",
 }

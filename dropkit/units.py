@@ -21,7 +21,7 @@ import numpy as np
 
 from dropkit.errors import BadInput, UnitError, Unphysical
 from dropkit.unit_arrays import float_array, float_series, is_real, is_series
-from dropkit.unit_errors import bad_form, mark_error, mismatch, named, needs
+from dropkit.unit_errors import bad_form, mark_error, mismatch, named, needs, shown
 from dropkit.unit_limits import check_domain_of, check_plausible, inside, kelvin_hint
 from dropkit.unit_table import (
     KINDS,
@@ -230,7 +230,8 @@ def _pair(value: tuple[Any, str], kind: Kind, depth: int) -> tuple[Any, Asked]:
     if asked is not None:
         raise bad_form("it carries two units", kind)
     if is_series(number):
-        number = number.to_numpy()
+        si = _grammar().convert(number.to_numpy(), value[1], kind, _lookup)
+        return type(number)(si, index=number.index, name=number.name), _ASKED
     return _grammar().convert(number, value[1], kind, _lookup), _ASKED
 
 
@@ -330,9 +331,9 @@ def read(
     if type(si) is not float and is_series(si):
         plain = si.to_numpy()
     if not inside(plain, limit):
-        check_domain_of(name, plain, its, limit, asked is None)
+        check_domain_of(name, plain, its, limit, shown(value) if asked else "")
     if plausible:
-        check_plausible(name, plain, its, asked is None)
+        check_plausible(name, plain, its, shown(value) if asked else "")
     return si, asked
 
 

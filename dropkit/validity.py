@@ -67,6 +67,12 @@ class Range:
         outside = (value < self.low) | (value > self.high)
         return ~outside if isinstance(outside, np.ndarray) else not outside
 
+    def covers(self, values: Any) -> bool:
+        """Whether all of some values (float or array, SI) lie inside; False where one is NaN."""
+        if isinstance(values, np.ndarray):
+            return bool(values.size and self.low <= values.min() and values.max() <= self.high)
+        return bool(self.low <= values <= self.high)
+
     def __str__(self) -> str:
         if self.unit == "K":
             return (
@@ -120,6 +126,8 @@ def settle(
     Returns a mask of the elements that must become NaN: False, True, or a boolean
     array. Raises OutOfRange or warns once, naming the count and the first elements.
     """
+    if limits.covers(value):
+        return False
     inside = limits.holds(value)
     if inside is True or (isinstance(inside, np.ndarray) and inside.all()):
         return False
@@ -139,7 +147,7 @@ def settle(
             f"{shown}{more} {limits.unit}".rstrip()
         )
     else:
-        what = f"{subject}: {limits.what} {value:g} {limits.unit} is out of range"
+        what = f"{subject}: {limits.what} {value:g} {limits.unit}".rstrip() + " is out of range"
     if outside == "warn":
         warnings.warn(f"{what}; stated range {limits}", RangeWarning, stacklevel=stacklevel)
         return False
@@ -148,6 +156,6 @@ def settle(
         what,
         allowed=str(limits),
         hint=hint
-        or f"The nearest valid value is {nearest:g} {limits.unit}; outside='warn', 'nan' or "
-        "'allow' changes what happens",
+        or f"The nearest valid value is {nearest:g} {limits.unit}".rstrip()
+        + "; outside='warn', 'nan' or 'allow' changes what happens",
     )

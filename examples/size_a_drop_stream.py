@@ -36,7 +36,7 @@ def stream(glycerol: float, temperature: float, flow: float) -> dict[str, float]
     weber_wave = jet.most_unstable_wavelength_viscous_longwave(*liquid, diameter)
     rayleigh_wave = jet.most_unstable_wavelength_inviscid(diameter)
     best = jet.drive_frequency(velocity, weber_wave)
-    length = jet.breakup_length_natural(*liquid, velocity, diameter)
+    length = jet.natural_breakup_length(*liquid, velocity, diameter)
     return {
         "density": state.density,
         "viscosity": state.viscosity,

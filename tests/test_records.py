@@ -20,8 +20,10 @@ from hypothesis import strategies as st
 
 from dropkit import records, sealing
 from dropkit.errors import RecordError, UnknownName
+from dropkit.provenance import Source
 from dropkit.record_index import fold
 from dropkit.record_rules import independent, publication
+from dropkit.record_schema import read_liquid, read_pair, read_source
 from dropkit.record_store import Store, seal_of
 from dropkit.validity import Range
 
@@ -220,6 +222,8 @@ BROKEN = [
     ("value = 260.0", "value = -3.0", "melting_point: value: is -3.0"),
     ("value = 260.0", "value = true", "melting_point: value: is True"),
     ("[[density]]", "[density]", r"density: is not a list of blocks.*\[\[density\]\]"),
+    (", value = 1000.1", ", value = 0", "check 1: value: is 0"),
+    ("[[density]]", "density = []\n[[x]]", "not known here"),
     ("[[density]]", "[[densty]]", r"densty: is not known here.*'density'"),
     ("range = [260.0, 400.0]", "range = [400.0, 260.0]", "range: runs from 400 to 260"),
     ("range = [260.0, 400.0]", "range = [260.0]", "range: is "),
@@ -279,6 +283,60 @@ def test_a_broken_pair_names_file_key_and_command(
     with pytest.raises(RecordError, match=message) as caught:
         Store(str(folder)).pair("alpha", "beta")
     assert "python -m dropkit.records seal mixtures/alpha__beta" in str(caught.value)
+
+
+def places(value: Any, path: tuple[Any, ...] = ()) -> list[tuple[Any, ...]]:
+    """The path to every value inside parsed data."""
+    items: Any = value.items() if isinstance(value, dict) else enumerate(value)
+    found = []
+    for key, inner in items:
+        found.append((*path, key))
+        if isinstance(inner, (dict, list)):
+            found.extend(places(inner, (*path, key)))
+    return found
+
+
+toml_values = st.recursive(
+    st.one_of(st.booleans(), st.integers(), st.floats(), st.text(max_size=5), st.dates()),
+    lambda inner: st.lists(inner, max_size=3) | st.dictionaries(st.text(max_size=5), inner),
+    max_leaves=5,
+)
+
+
+@pytest.mark.parametrize(
+    ("read", "stem", "text"),
+    [
+        (read_liquid, "alpha", made_up.ALPHA),
+        (read_pair, "alpha__beta", made_up.ALPHA_BETA),
+        (read_source, "CookCopy", made_up.SOURCES["CookCopy"]),
+    ],
+)
+@given(data=st.data())
+def test_whatever_a_file_holds_only_a_record_error_comes(
+    read: Any, stem: str, text: str, data: st.DataObject
+) -> None:
+    content = tomllib.loads(text)
+    *path, last = data.draw(st.sampled_from(places(content)))
+    inside: Any = content
+    for key in path:
+        inside = inside[key]
+    if data.draw(st.booleans()):
+        inside[last] = data.draw(toml_values)
+    else:
+        del inside[last]
+    try:
+        record = read(stem, content)
+    except RecordError as error:
+        record = None
+        name = str(error).split(": ")[0]
+        assert name.startswith("data/")  # the error is the second good outcome
+    if record is not None and not isinstance(record, Source):
+        assert pickle.loads(pickle.dumps(record)) is not None
+        assert all(
+            block.uncertainty > 0 and block.sources and block.checks
+            for blocks in record.properties.values()
+            for block in blocks
+        )
 
 
 @pytest.mark.parametrize("content", [b"name = ", b"\xff\xfe", b'name = "a"\nname = "b"'])
@@ -565,7 +623,13 @@ def test_an_unknown_file_or_command_is_said(
         ),
         ("liquids/alpha", "uncertainty = 0.05", "uncertainty = 0.04", "'recalled' needs"),
         ("liquids/alpha", 'grade = "recalled"', 'grade = "single"', "from memory"),
-        ("liquids/alpha", 'grade = "recalled"', 'grade = "estimated"', "for results"),
+        ("liquids/alpha", 'grade = "single"', 'grade = "estimated"', "never estimated"),
+        (
+            "liquids/alpha",
+            'uncertainty = 0.05\ngrade = "recalled"',
+            'uncertainty = 0.04\ngrade = "estimated"',
+            "'estimated' needs an uncertainty",
+        ),
         ("liquids/alpha", 'grade = "recalled"', 'grade = "own"', "for results"),
         (
             "mixtures/alpha__beta",

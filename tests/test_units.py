@@ -481,7 +481,9 @@ def test_impossible_temperatures_remind_of_kelvin_if_bare() -> None:
         read(np.array([300.0, 0.0]), "temperature", "T")
     with pytest.raises(Unphysical) as caught:
         read("-300 degC", "temperature", "T")
-    assert "kelvin expected" not in str(caught.value)
+    message = str(caught.value)
+    assert message.startswith("T = -26.85 K (given as '-300 degC') is impossible")
+    assert "kelvin expected" not in message
 
 
 def test_percent_for_a_fraction_is_named() -> None:

@@ -89,7 +89,7 @@ def model_entries(family: str | None = None) -> tuple[ModelEntry, ...]:
 
     Examples
     --------
-    >>> print(model_entries("jet")[-1])
+    >>> print(*[entry for entry in model_entries("jet") if entry.name == "jet_velocity"])
     jet.jet_velocity: Mean speed of a round jet from its volume flow.
     """
     families = model_families()

@@ -82,6 +82,9 @@ def to_mass(
     keys: Sequence[str], fractions: Sequence[Any], basis: str, measured_at: float = 293.15
 ) -> tuple[Any, ...]:
     """Mass fractions from amounts or fractions on any basis; normalised."""
+    if basis == "mass":
+        total = sum(fractions[1:], start=fractions[0])
+        return tuple(value / total for value in fractions)
     masses = [
         value / _per_mass(key, basis, measured_at)
         for key, value in zip(keys, fractions, strict=True)

@@ -6,6 +6,7 @@ holds the temperature serves it. Everything here is SI and unaware of units.
 
 from __future__ import annotations
 
+import math
 from collections.abc import Callable, Sequence
 from itertools import pairwise
 from typing import Any, NamedTuple, TypeAlias
@@ -17,7 +18,7 @@ from dropkit.properties.equations import FORMS
 from dropkit.records import PropertyRecord
 from dropkit.validity import Range
 
-__all__ = ["CHUNK", "Curve", "Fast", "FloatArray"]
+__all__ = ["CHUNK", "Curve", "Fast", "FloatArray", "stepwise"]
 
 FloatArray: TypeAlias = "np.ndarray[Any, np.dtype[np.float64]]"
 
@@ -53,13 +54,17 @@ class Curve:
         self.range = _union(self.records, self.ranges)
         self._scalars = [FORMS[r.form].scalar(r.parameters) for r in records]
         self._arrays = [FORMS[r.form].array(r.parameters) for r in records]
-        self.scalar = self._scalars[0] if len(self._scalars) == 1 else self._first_that_holds
         ends = sorted({end for limits in self.ranges for end in (limits.low, limits.high)})
         middles = [0.5 * (a + b) for a, b in pairwise(ends)]
         self._ends = np.array(ends)
         self._at_end = np.array([self.serving(end) for end in ends])
         self._between = np.array(
             [self.serving(t) for t in (ends[0] - 1.0, *middles, ends[-1] + 1.0)]
+        )
+        self.scalar = stepwise(
+            ends,
+            [self._scalars[k] for k in self._between],
+            [self._scalars[k] for k in self._at_end],
         )
 
     @property
@@ -74,9 +79,6 @@ class Curve:
                 return number
         gaps = [max(r.low - temperature, temperature - r.high) for r in self.ranges]
         return gaps.index(min(gaps))
-
-    def _first_that_holds(self, temperature: float) -> float:
-        return self._scalars[self.serving(temperature)](temperature)
 
     def serve(self, temperature: FloatArray) -> np.ndarray[Any, np.dtype[np.intp]]:
         """Index of the record that serves each of some temperatures [K]."""
@@ -101,6 +103,46 @@ class Curve:
                 part = np.empty(chosen.size)
                 write(temperature[chosen], part)
                 out[chosen] = part
+
+
+def stepwise(
+    ends: Sequence[float],
+    between: Sequence[Callable[[float], float]],
+    at_end: Sequence[Callable[[float], float]],
+) -> Callable[[float], float]:
+    """One function of temperature from the functions that serve its stretches.
+
+    Parameters
+    ----------
+    ends : sequence of float
+        Ends of the stretches [K], rising.
+    between : sequence of callables
+        What serves below the first end, between the ends, and above the last.
+    at_end : sequence of callables
+        What serves exactly at each end.
+    """
+    table: list[tuple[float, Callable[[float], float]]] = []
+
+    def put(high: float, function: Callable[[float], float]) -> None:
+        if table and table[-1][1] is function:
+            table.pop()
+        table.append((high, function))
+
+    for end, below, here in zip(ends, between, at_end, strict=False):
+        if here is not below:
+            put(math.nextafter(end, -math.inf), below)
+        put(end, here)
+    put(math.inf, between[-1])
+    if len(table) == 1:
+        return table[0][1]
+
+    def value(temperature: float) -> float:
+        for high, function in table:
+            if temperature <= high:
+                return function(temperature)
+        return math.nan
+
+    return value
 
 
 def _union(records: Sequence[PropertyRecord], ranges: Sequence[Range]) -> Range:

@@ -3,7 +3,6 @@
 from __future__ import annotations
 
 from collections.abc import Iterable, Sequence
-from html import escape
 from typing import TYPE_CHECKING, Any
 
 import numpy as np
@@ -25,6 +24,14 @@ __all__ = [
 ]
 
 ROOM = 293.15
+
+
+def escape(text: str) -> str:
+    """Text for HTML."""
+    # Imported here: its table of entities costs more than a look-up.
+    from html import escape as escaped
+
+    return escaped(text)
 
 
 def _kind(word: str) -> Kind:

@@ -86,7 +86,7 @@ class Air:
     >>> print(f"{room.dew_point:.1f}")
     9.3 degree_Celsius
     >>> round(room.si().mean_free_path * 1e9, 1)
-    66.4
+    66.2
     """
 
     __slots__ = ("_asked", "_humidity", "_index", "_outside", "_point", "_values")

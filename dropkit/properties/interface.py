@@ -157,9 +157,11 @@ class Fluid:
             values = self._evaluate(prop, temperature.to_numpy(dtype=float), outside)
             return type(temperature)(values, index=temperature.index, name=prop)
         limits = self._range(prop)
-        lowest = np.fmin.reduce(np.ravel(temperature), initial=np.inf)
-        hint = KELVIN_HINT if lowest < 150.0 and limits.low > 150.0 else ""
-        lost = settle(f"{prop} of {self.name}", temperature, limits, outside, hint=hint)
+        lost: Any = False
+        if not limits.covers(temperature):
+            lowest = np.fmin.reduce(np.ravel(temperature), initial=np.inf)
+            hint = KELVIN_HINT if lowest < 150.0 and limits.low > 150.0 else ""
+            lost = settle(f"{prop} of {self.name}", temperature, limits, outside, hint=hint)
         unfit = self._settle_point(prop, temperature, outside)
         if not isinstance(temperature, np.ndarray) and self._shape() == ():
             return self._one(prop, temperature, limits, lost or unfit)
@@ -192,6 +194,11 @@ class Fluid:
                 part = slice(start, start + CHUNK)
                 fluid._fill(prop, part, flat[part], work[part])
         out = work.reshape(shape)
+        # NaN fails these comparisons and takes the long way.
+        good = out.size == 0 or (out.min() > 0.0 and out.max() < np.inf)
+        inside = lost is False and unfit is False and limits.covers(np.asarray(temperature))
+        if good and (inside or not out.size):
+            return out
         asked_nan = np.broadcast_to(np.isnan(temperature), shape)
         deep = np.broadcast_to(np.asarray(temperature) < 0.5 * limits.low, shape)
         gone = np.broadcast_to(np.asarray(lost) | np.asarray(unfit), shape)

@@ -19,6 +19,7 @@ from dropkit.errors import (
     RangeWarning,
 )
 from dropkit.properties import display
+from dropkit.properties.cautions import mixture_cautions, mixture_phases
 from dropkit.properties.composition import (
     Composition,
     check_basis,
@@ -27,7 +28,7 @@ from dropkit.properties.composition import (
 )
 from dropkit.properties.curves import FloatArray
 from dropkit.properties.interface import GRADED, PROPERTIES, Fluid
-from dropkit.properties.mixing.blend import Blend, blend
+from dropkit.properties.mixing.blends import Blend, blend
 from dropkit.properties.mixing.redlich_kister import RULES
 from dropkit.properties.pure import (
     Liquid,
@@ -42,10 +43,6 @@ from dropkit.validity import Range, settle
 __all__ = ["Mixture", "mixture"]
 
 ESTIMATES: Final = ("warn", "allow", "refuse")
-FIRE_NOTE: Final = (
-    "the mixture's flash point is not predicted; a mist or foam can burn below it; water does "
-    "not make it non-flammable; follow the safety data sheet and local codes"
-)
 
 
 def mixture(
@@ -226,20 +223,7 @@ class Mixture(Fluid):
         """Flash points and hazards of the components, and what they don't say of the mixture."""
         if self._pure is not None:
             return self._pure.cautions
-        texts: list[str] = []
-        fire = False
-        for key in self._keys:
-            entry = records.liquid_record(key)
-            if entry.kind != "liquid":
-                notes = (entry.facts.get("hazards") or {}).get("notes", ())
-                texts += [f"{entry.name}: {note}" for note in notes]
-                continue
-            part = Liquid(entry)
-            texts += part.cautions
-            fire = fire or part.flash_point is not None
-        if fire:
-            texts.append(FIRE_NOTE)
-        return tuple(texts)
+        return tuple(mixture_cautions(self._keys))
 
     @property
     def assumptions(self) -> tuple[str, ...]:
@@ -344,10 +328,12 @@ class Mixture(Fluid):
         subject = f"{prop} of {self.name}"
         mask: Any = False
         for share, limits in rule.composition_limits(self._mass):
-            if limits.low > 0.0 or limits.high < 1.0:
-                mask = mask | settle(subject, share, limits, outside)
-        unserved = rule.unserved(self._mass, temperature) & ~np.asarray(mask)
-        if not np.any(unserved) or outside == "allow":
+            mask = mask | settle(subject, share, limits, outside)
+        unserved = rule.unserved(self._mass, temperature)
+        if unserved is False or outside == "allow":
+            return mask
+        unserved = unserved & ~np.asarray(mask)
+        if not np.any(unserved):
             return mask
         if outside == "nan":
             return mask | unserved
@@ -390,7 +376,7 @@ class Mixture(Fluid):
         cautions = [text for block in used for text in block.cautions]
         if prop == "viscosity":
             cautions.append("viscosity at low shear")
-        cautions += self._phase_cautions(temperature)
+        cautions += mixture_phases(self._keys, temperature)
         return Trail(
             quantity=prop,
             subject=self.name,
@@ -402,28 +388,6 @@ class Mixture(Fluid):
             cautions=tuple(dict.fromkeys(cautions)),
             versions=versions(),
         )
-
-    def _phase_cautions(self, temperature: float | FloatArray | None) -> list[str]:
-        """Where a component would boil or freeze by itself; the mixture's points aren't predicted."""
-        if temperature is None or not np.isfinite(temperature).any():
-            return []
-        low, high = float(np.nanmin(temperature)), float(np.nanmax(temperature))
-        texts = []
-        for key in self._keys:
-            entry = records.liquid_record(key)
-            if entry.kind != "liquid":
-                continue
-            if entry.boiling_point is not None and high > entry.boiling_point:
-                texts.append(
-                    f"above the boiling point of {entry.name} "
-                    f"({entry.boiling_point - 273.15:.1f} degC): may need pressure to stay liquid"
-                )
-            if entry.melting_point is not None and low < entry.melting_point:
-                texts.append(
-                    f"below the melting point of {entry.name} "
-                    f"({entry.melting_point - 273.15:.1f} degC): freezing is not predicted"
-                )
-        return texts
 
     def _spread(self, rule: Blend, prop: str, temperature: float | FloatArray | None) -> float:
         """Relative standard uncertainty: of the pairs, the pure ends by their share, and estimates."""

@@ -3,23 +3,22 @@
 from __future__ import annotations
 
 from collections.abc import Callable
-from typing import Any, Final
+from typing import Any
 
 import numpy as np
 
-from dropkit import __version__, records
+from dropkit import records
 from dropkit.errors import NotALiquid
 from dropkit.properties import display
 from dropkit.properties.catalogue import resolve
+from dropkit.properties.cautions import liquid_cautions, liquid_phases
 from dropkit.properties.curves import Curve, FloatArray
 from dropkit.properties.interface import PROPERTIES, Fluid
 from dropkit.provenance import RecordUse, Trail, worst_grade
 from dropkit.validity import Range
+from dropkit.version import VERSION
 
 __all__ = ["Liquid", "liquid", "quotient_trail", "record_use", "relative_uncertainty", "versions"]
-
-# Below this conductivity a liquid keeps the charge that flow puts on it.
-STATIC_ACCUMULATOR: Final = 50e-12  # S/m; IEC TS 60079-32-1 and API RP 2003 use it, from memory
 
 
 def liquid(name: str) -> Liquid:
@@ -130,23 +129,7 @@ class Liquid(Fluid):
     @property
     def cautions(self) -> tuple[str, ...]:
         """What to know before use: flash point, static charge, hazards, surface state."""
-        return tuple(self._liquid_cautions())
-
-    def _liquid_cautions(self) -> list[str]:
-        texts = []
-        flash = self.flash_point
-        if flash:
-            texts.append(
-                f"{self.name}: flash point {flash['value'] - 273.15:.0f} degC "
-                f"({flash.get('method', 'method not stated')}; {flash['source']})"
-            )
-        conductivity = self.record.properties.get("electrical_conductivity", ())
-        if any(_lowest(block) < STATIC_ACCUMULATOR for block in conductivity):
-            texts.append(f"{self.name}: below 50 pS/m, static accumulator")
-        hazards = self.record.facts.get("hazards") or {}
-        texts += [f"{self.name}: {note}" for note in hazards.get("notes", ())]
-        texts += self.record.cautions
-        return texts
+        return tuple(liquid_cautions(self.record))
 
     # ------------------------------------------------ what Fluid asks for
     def available(self) -> tuple[str, ...]:
@@ -200,7 +183,7 @@ class Liquid(Fluid):
         cautions = [text for block in blocks for text in block.cautions]
         if prop == "viscosity":
             cautions.append("viscosity at low shear")
-        cautions += self.phase_cautions(temperature)
+        cautions += liquid_phases(self.record, temperature)
         return Trail(
             quantity=prop,
             subject=self.name,
@@ -212,28 +195,6 @@ class Liquid(Fluid):
             versions=versions(),
         )
 
-    def phase_cautions(self, temperature: float | FloatArray | None) -> list[str]:
-        """``supercooled`` below the melting point, the pressure needed above the boiling point."""
-        if temperature is None or not np.size(temperature):
-            return []
-        low, high = float(np.nanmin(temperature)), float(np.nanmax(temperature))
-        texts = []
-        if self.melting_point is not None and low < self.melting_point:
-            texts.append(
-                f"supercooled: {self.name} melts at {self.melting_point - 273.15:.1f} degC"
-            )
-        if self.boiling_point is not None and high > self.boiling_point:
-            need = ""
-            if "vapour_pressure" in self.record.properties:
-                curve = self.curve("vapour_pressure")
-                if curve.range.low <= high <= curve.range.high:
-                    need = f"needs p >= {curve.scalar(high) / 1e5:.3g} bar (absolute)"
-            texts.append(
-                f"{need or 'needs pressure'} to stay liquid: {self.name} boils at "
-                f"{self.boiling_point - 273.15:.1f} degC at 1 atm"
-            )
-        return texts
-
     # ------------------------------------------------ display
     def __repr__(self) -> str:
         return display.fluid_text(self, f"Liquid {self.name}, CAS {self.cas}, {self.formula}")
@@ -244,7 +205,7 @@ class Liquid(Fluid):
 
 def versions() -> dict[str, str]:
     """Versions of dropkit and its data, for trails."""
-    return {"dropkit": __version__, "data": records.data_version()}
+    return {"dropkit": VERSION, "data": records.data_version()}
 
 
 def record_use(block: records.PropertyRecord) -> RecordUse:
@@ -287,11 +248,6 @@ def _midvalue(curve: Curve, temperature: float | FloatArray) -> float | None:
     out = np.empty(kelvin.size)
     curve.fill(np.ascontiguousarray(kelvin), out)
     return float(out.min())
-
-
-def _lowest(block: records.PropertyRecord) -> float:
-    """Value of a record at the low end of its range."""
-    return Curve([block]).scalar(block.range.low)
 
 
 def quotient_trail(fluid: Fluid, temperature: float | FloatArray | None) -> Trail:

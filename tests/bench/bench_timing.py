@@ -1,4 +1,8 @@
-"""Timing by turns: ours, the rival, ours, ... in one process, so that both see the same machine."""
+"""Timing by turns: ours, the rival, ours, ... in one process, so that both see the same machine.
+
+Calls are timed by the processor's clock: all of them run on one thread and wait for nothing, and
+a neighbour's load on the machine would count as ours by the clock on the wall.
+"""
 
 from __future__ import annotations
 
@@ -6,7 +10,7 @@ import statistics
 import subprocess
 import sys
 from collections.abc import Callable, Iterable
-from time import perf_counter
+from time import process_time
 from typing import Any, NamedTuple
 
 
@@ -20,9 +24,9 @@ class Duel(NamedTuple):
 
 def seconds(call: Callable[[], Any]) -> float:
     """How long one call takes."""
-    begun = perf_counter()
+    begun = process_time()
     call()
-    return perf_counter() - begun
+    return process_time() - begun
 
 
 def duel(ours: Callable[[], Any], rival: Callable[[], Any], turns: int = 9) -> Duel:
@@ -35,7 +39,7 @@ def duel(ours: Callable[[], Any], rival: Callable[[], Any], turns: int = 9) -> D
     )
 
 
-def per_call(call: Callable[[Any], Any], arguments: Iterable[Any], rounds: int = 9) -> float:
+def per_call(call: Callable[[Any], Any], arguments: Iterable[Any], rounds: int = 31) -> float:
     """Median seconds of one scalar call, over rounds through different arguments.
 
     Different arguments: a look-up that only remembered its last answer would gain nothing.
@@ -43,10 +47,10 @@ def per_call(call: Callable[[Any], Any], arguments: Iterable[Any], rounds: int =
     values = list(arguments)
     times = []
     for _ in range(rounds + 1):
-        begun = perf_counter()
+        begun = process_time()
         for value in values:
             call(value)
-        times.append((perf_counter() - begun) / len(values))
+        times.append((process_time() - begun) / len(values))
     return statistics.median(times[1:])
 
 
@@ -67,17 +71,29 @@ for begun, ended in ((a, b), (b, c), (c, d), (d, e)):
     print(ended[0] - begun[0], ended[1] - begun[1])
 """
 
+PINT = """
+import numpy
+from time import perf_counter, process_time
+def now():
+    return perf_counter(), process_time()
+a = now()
+import pint
+pint.get_application_registry().Quantity(1.0, "mPa*s")
+b = now()
+print(b[0] - a[0], b[1] - a[1])
+"""
 
-def start_costs(runs: int = 9) -> list[tuple[float, float]]:
-    """Median seconds by the clock and of the processor, each step in new processes.
 
-    The steps: numpy, dropkit on top, the first SI look-up, the first unit string. On a busy
-    machine the processor's time says more.
+def start_costs(script: str = STARTS, runs: int = 9) -> list[tuple[float, float]]:
+    """Median seconds by the clock and of the processor, each step of a script in new processes.
+
+    The default's steps: numpy, dropkit on top, the first SI look-up, the first unit string. On a
+    busy machine the processor's time says more.
     """
     results = []
     for _ in range(runs + 1):
         run = subprocess.run(
-            [sys.executable, "-c", STARTS], capture_output=True, text=True, check=True
+            [sys.executable, "-c", script], capture_output=True, text=True, check=True
         )
         results.append([tuple(map(float, line.split())) for line in run.stdout.splitlines()])
     steps = zip(*results[1:], strict=True)  # the first run compiles the modules

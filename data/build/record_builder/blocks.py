@@ -40,7 +40,9 @@ _KEYS = {
 }
 # Kept in the record, so that a reader sees why.
 _REMARKS = ("mixture_range_reason", "source_uncertainty_reason", "single_reason", "note")
-_GRADES = ("reference", "measured", "single", "recalled")
+_GRADES = ("reference", "measured", "single", "recalled", "estimated")
+# Grades that rest on no second source and are not refused for want of one.
+_UNCHECKED = ("recalled", "estimated")
 _SLACK = 2.0  # K that a range may reach beyond its data
 _OVERSHOOT = 2.0  # largest excess between the points over the largest at them
 
@@ -210,7 +212,7 @@ def _spread(
         stated = in_si / typical
     else:
         raise BuildError(f"{block.what}: source_uncertainty is missing")
-    if spec.get("grade") == "recalled":
+    if spec.get("grade") in _UNCHECKED:
         stated = max(stated, 0.05)
     filled = [group for group in groups if group]
     halves = [0.5 * quantile(relative(group), 0.95) for group in filled]
@@ -321,7 +323,7 @@ def build_block(
         if judged
         else f"{what}: no independent second source inside the range"
     )
-    if refusal and not spec.get("single") and spec.get("grade") != "recalled":
+    if refusal and not spec.get("single") and spec.get("grade") not in _UNCHECKED:
         raise Refused(refusal)
 
     grade = _grade(spec, what, not refusal)

@@ -90,7 +90,8 @@ def jet_diameter_laminar_pipe(
     """
     reynolds = density * velocity * nozzle_diameter / viscosity
     mask = outside_mask("jet_diameter_laminar_pipe", outside, (reynolds, LAMINAR))
-    result: float = blank_outside(_PARABOLA * nozzle_diameter, mask)
+    # What only decides the range still passes its NaN and its shape on.
+    result: float = blank_outside(_PARABOLA * nozzle_diameter + 0.0 * reynolds, mask)
     return result
 
 
@@ -146,5 +147,6 @@ def jet_diameter_turbulent_pipe(
     """
     reynolds = density * velocity * nozzle_diameter / viscosity
     mask = outside_mask("jet_diameter_turbulent_pipe", outside, (reynolds, TURBULENT))
-    result: float = blank_outside(_SEVENTH_POWER * nozzle_diameter, mask)
+    # What only decides the range still passes its NaN and its shape on.
+    result: float = blank_outside(_SEVENTH_POWER * nozzle_diameter + 0.0 * reynolds, mask)
     return result

@@ -43,6 +43,9 @@ class Pair:
             for low, high in (b.parameters.get("fraction_range", (0.0, 1.0)) for b in blocks)
         )
 
+        # The range of the preferred record, if it holds any composition: most points need no more.
+        self.whole = self.blocks[0].range if self.shares[0] == (0.0, 1.0) else None
+
     def holding(self, share: float) -> list[int]:
         """Numbers of the records whose composition range holds a mass share of the first."""
         return [k for k, (low, high) in enumerate(self.shares) if low <= share <= high]
@@ -78,7 +81,7 @@ class Pair:
     def add(
         self,
         fractions: tuple[Any, Any],
-        share: Any,
+        masses: tuple[Any, Any],
         temperature: FloatArray,
         reduced: FloatArray,
         out: FloatArray,
@@ -86,9 +89,10 @@ class Pair:
         binary: bool,
     ) -> None:
         """Add the excess to `out`, a flat chunk, each point by the record that serves it."""
-        if len(self.blocks) == 1:
+        if len(self.blocks) == 1 or (self.whole is not None and self.whole.covers(temperature)):
             self.excesses[0].add(*fractions, reduced, out, binary=binary)
             return
+        share = share_of(*masses)
         number = self.serve(share, temperature)
         lost = np.flatnonzero(number < 0)
         if lost.size:

@@ -7,7 +7,6 @@ someone else's transcription.
 from __future__ import annotations
 
 import csv
-import math
 
 import pytest
 from hypothesis import given

@@ -7,7 +7,6 @@ a record enters without excess, and the property is an estimate.
 from __future__ import annotations
 
 import tomllib
-from bisect import bisect_left
 from collections.abc import Callable, Sequence
 from functools import cache
 from itertools import combinations, pairwise
@@ -18,7 +17,7 @@ import numpy as np
 from dropkit import records
 from dropkit.errors import EstimateRefused, MissingProperty
 from dropkit.properties.composition import reference_density
-from dropkit.properties.curves import Curve, FloatArray
+from dropkit.properties.curves import Curve, FloatArray, stepwise
 from dropkit.properties.mixing import electrolytes
 from dropkit.properties.mixing.pair import Pair, share_of
 from dropkit.properties.mixing.redlich_kister import RULES, collapse, reduced_temperature
@@ -171,7 +170,8 @@ class Blend:
         for pair in self.pairs:
             a, b = self.records[pair.first].name, self.records[pair.second].name
             limits = pair.share_range(f"mass fraction of {a} in {a} + {b}")
-            found.append((self._share(pair, mass), limits))
+            if limits.low > 0.0 or limits.high < 1.0:
+                found.append((self._share(pair, mass), limits))
         for number, block in zip(self.solutes, self.salts, strict=True):
             low, high = block.parameters.get("fraction_range", (0.0, 1.0))
             name = f"mass fraction of {self.keys[number].replace('_', ' ')}"
@@ -184,9 +184,9 @@ class Blend:
         kelvin = np.asarray(temperature, dtype=float)
         mask: Any = False
         for pair in self.pairs:
-            if len(pair.blocks) > 1:
+            if pair.whole is None or not pair.whole.covers(kelvin):
                 mask = mask | (pair.serve(self._share(pair, mass), kelvin) < 0)
-        return mask & ~np.isnan(kelvin)
+        return mask & ~np.isnan(kelvin) if np.any(mask) else False
 
     def serving(self, mass: Sequence[Any], temperature: Any) -> list[PropertyRecord]:
         """The records that serve some temperatures (all of them for None) at a composition."""
@@ -259,9 +259,15 @@ class Blend:
     # ------------------------------------------------ one composition
     def fractions(self, mass: Sequence[Any]) -> list[Any]:
         """Solvents' fractions on the rule's basis, free of salts."""
+        if self.basis == "mass" and not self.solutes:
+            return list(mass)
         parts = [mass[i] * v for i, v in zip(self.solvents, self.inverse_density, strict=True)]
-        total = sum(parts)
-        return [part / total for part in parts]
+        total = parts[0]
+        for part in parts[1:]:
+            total = total + part
+        shares = [part / total for part in parts[:-1]]
+        last = 1.0 - shares[0] if len(parts) == 2 else parts[-1] / total
+        return [*shares, last] if shares else [last]
 
     def scalar(self, mass: Sequence[float]) -> Callable[[float], float]:
         """The property [SI] as a function of temperature [K] for one composition."""
@@ -326,15 +332,7 @@ class Blend:
             return made[numbers]
 
         between = [serving(t) for t in (edges[0] - 1.0, *middles, edges[-1] + 1.0)]
-        on_edge = dict(zip(edges, map(serving, edges), strict=True))
-
-        def value(temperature: float) -> float:
-            exact = on_edge.get(temperature)
-            if exact is not None:
-                return exact(temperature)
-            return between[bisect_left(edges, temperature)](temperature)
-
-        return value
+        return stepwise(edges, between, [serving(end) for end in edges])
 
     def _salted_scalar(
         self, solvent: Callable[[float], float], mass: Sequence[float]
@@ -420,8 +418,8 @@ class Blend:
         binary = len(fractions) == 2
         for pair in pairs:
             two = (fractions[pair.first], fractions[pair.second])
-            share = self._share(pair, mass)
-            pair.add(two, share, temperature, reduced, out, binary=binary)
+            masses = (mass[self.solvents[pair.first]], mass[self.solvents[pair.second]])
+            pair.add(two, masses, temperature, reduced, out, binary=binary)
         if self.transform == "log":
             np.exp(out, out=out)
         elif self.transform == "reciprocal":
