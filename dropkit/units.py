@@ -156,7 +156,7 @@ def _magnitude(value: Any, kind: Kind) -> Any:
     """SI magnitude of a Quantity of any registry."""
     magnitude, _ = _any(value.magnitude, kind, 1)
     try:
-        units = value.units
+        units = value._units  # names and powers; building a Unit of them takes its time
         factor, roots = value._REGISTRY.get_root_units(units)
         scale, dimension, radian = _si_of_roots(factor, roots._units)
         linear = value._is_multiplicative  # neither an offset nor a logarithm
@@ -190,7 +190,7 @@ def _kelvin(magnitude: Any, scale: float, value: Any, linear: bool, kind: Kind) 
         raise mark_error(name, "temperature", kind)
     if name == "degree_Celsius":
         return magnitude + ZERO_CELSIUS
-    zero = value._REGISTRY.Quantity(0.0, value.units).to_root_units().magnitude
+    zero = value._REGISTRY.Quantity(0.0, value._units).to_root_units().magnitude
     return magnitude * scale + float(zero)
 
 
@@ -242,6 +242,8 @@ def _any(value: Any, kind: Kind, depth: int = 0) -> tuple[Any, Asked | None]:
     if isinstance(value, str):
         si, carried = _grammar().quantity(str(value), kind, _lookup)
         return si, _ASKED if carried else None
+    if hasattr(value, "_REGISTRY") and hasattr(value, "magnitude"):
+        return _magnitude(value, kind), Asked(value._REGISTRY)
     if isinstance(value, (bool, np.bool_)):
         raise bad_form("a boolean is no number", kind)
     if is_real(value):
@@ -249,8 +251,6 @@ def _any(value: Any, kind: Kind, depth: int = 0) -> tuple[Any, Asked | None]:
             return float(value), None
         except (OverflowError, ValueError):
             raise Unphysical("the number is too large") from None
-    if hasattr(value, "_REGISTRY") and hasattr(value, "magnitude"):
-        return _magnitude(value, kind), Asked(value._REGISTRY)
     if isinstance(value, np.ndarray):
         return float_array(value, kind), None
     if isinstance(value, (list, tuple, range)):

@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 import csv
-from collections.abc import Iterable, Iterator
+from collections.abc import Iterable, Iterator, Mapping
 from dataclasses import dataclass
 from functools import cache
 
@@ -14,7 +14,7 @@ from dropkit.errors import RecordError
 from dropkit.properties.curves import FloatArray
 from dropkit.records import PropertyRecord
 
-__all__ = ["Points", "pair_points", "pure_points"]
+__all__ = ["Points", "exclusion", "pair_points", "pure_points"]
 
 
 @dataclass(frozen=True)
@@ -50,16 +50,44 @@ def _rows(name: str) -> tuple[dict[str, str], ...]:
 
 
 @cache
-def _excluded() -> frozenset[tuple[str, ...]]:
+def _exclusions() -> dict[str, list[dict[str, str]]]:
     path = records.data_dir() / "published" / "excluded.csv"
-    if not path.is_file():
-        return frozenset()
-    with path.open(encoding="utf-8", newline="") as lines:
-        rows = csv.DictReader(line for line in lines if not line.startswith("#"))
-        return frozenset(
-            (r["file"], r["component_1"], r["property"], r["T_K"], r["fraction_1"], r["value"])
-            for r in rows
+    listed: dict[str, list[dict[str, str]]] = {}
+    if path.is_file():
+        with path.open(encoding="utf-8", newline="") as lines:
+            for row in csv.DictReader(line for line in lines if not line.startswith("#")):
+                listed.setdefault(row["file"], []).append(row)
+    return listed
+
+
+def exclusion(file: str, row: Mapping[str, str]) -> str:
+    """Why a published row is excluded, or an empty text.
+
+    Parameters
+    ----------
+    file : str
+        Name within ``data/published``, such as ``"liquids/Jasper1972"``.
+    row : mapping
+        The row as published; empty numbers of the list of exclusions match any.
+    """
+    first = row.get("component_1", row.get("liquid", ""))
+    for listed in _exclusions().get(file, ()):
+        named = (
+            listed["component_1"] == first
+            and listed["component_2"] == row.get("component_2", "")
+            and listed["property"] == row["property"]
         )
+        if named and all(
+            _same(listed[column], row.get(column, "")) for column in ("T_K", "fraction_1", "value")
+        ):
+            return listed["reason"]
+    return ""
+
+
+def _same(listed: str, given: str) -> bool:
+    if not listed:
+        return True
+    return given != "" and abs(float(listed) - float(given)) <= 1e-6 * abs(float(given))
 
 
 def _files(blocks: Iterable[PropertyRecord]) -> list[str]:
@@ -69,13 +97,10 @@ def _files(blocks: Iterable[PropertyRecord]) -> list[str]:
 def pure_points(key: str, prop: str) -> Iterator[Points]:
     """Points of a pure liquid that its records were fitted to or checked with, by file."""
     for name in _files(records.liquid_record(key).properties.get(prop, ())):
-        out = _excluded()
         chosen = [
             row
             for row in _rows(name)
-            if row["liquid"] == key
-            and row["property"] == prop
-            and (name, key, prop, row["T_K"], "", row["value"]) not in out
+            if row["liquid"] == key and row["property"] == prop and not exclusion(name, row)
         ]
         if chosen:
             yield Points(
@@ -91,13 +116,12 @@ def pair_points(first: str, second: str, prop: str) -> Iterator[Points]:
     a, b = sorted((first, second))
     found = records.pair_record(a, b)
     for name in _files(found.properties.get(prop, ()) if found else ()):
-        out = _excluded()
         chosen = [
             row
             for row in _rows(name)
             if (row["component_1"], row["component_2"]) == (a, b)
             and row["property"] == prop
-            and (name, a, prop, row["T_K"], row["fraction_1"], row["value"]) not in out
+            and not exclusion(name, row)
         ]
         for basis in sorted({row["basis"] for row in chosen}):
             mine = [row for row in chosen if row["basis"] == basis]

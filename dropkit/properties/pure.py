@@ -9,9 +9,7 @@ import numpy as np
 
 from dropkit import records
 from dropkit.errors import NotALiquid
-from dropkit.properties import display
 from dropkit.properties.catalogue import resolve
-from dropkit.properties.cautions import liquid_cautions, liquid_phases
 from dropkit.properties.curves import Curve, FloatArray
 from dropkit.properties.interface import PROPERTIES, Fluid
 from dropkit.provenance import RecordUse, Trail, worst_grade
@@ -129,6 +127,8 @@ class Liquid(Fluid):
     @property
     def cautions(self) -> tuple[str, ...]:
         """What to know before use: flash point, static charge, hazards, surface state."""
+        from dropkit.properties.cautions import liquid_cautions
+
         return tuple(liquid_cautions(self.record))
 
     # ------------------------------------------------ what Fluid asks for
@@ -176,6 +176,8 @@ class Liquid(Fluid):
     def _trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
         if prop == "kinematic_viscosity":
             return quotient_trail(self, temperature)
+        from dropkit.properties.cautions import liquid_phases
+
         curve = self.curve(prop)
         serving = _serving(curve, temperature)
         blocks = [curve.records[number] for number in serving]
@@ -197,9 +199,13 @@ class Liquid(Fluid):
 
     # ------------------------------------------------ display
     def __repr__(self) -> str:
+        from dropkit.properties import display
+
         return display.fluid_text(self, f"Liquid {self.name}, CAS {self.cas}, {self.formula}")
 
     def _repr_html_(self) -> str:
+        from dropkit.properties import display
+
         return display.fluid_html(self, f"Liquid {self.name}, CAS {self.cas}, {self.formula}")
 
 

@@ -213,7 +213,7 @@ ENGINES: dict[str, Callable[[], dict[str, Curve]]] = {
 def tabulated_water_viscosity(folder: str) -> Curve:
     """CoolProp's batch call on a bicubic table of compressed water at 101325 Pa.
 
-    Not the saturated liquid, and 1.6 % off at 2 degC, but the fastest call there is
+    Not the saturated liquid, and up to 2.3 % off (20 to 40 degC), but the fastest call there is
     (CoolProp 8; described in its header file and type stub). The table takes 20 s to
     build and is kept in `folder`.
     """

@@ -8,6 +8,7 @@ from __future__ import annotations
 
 import json
 import math
+import re
 import subprocess
 import sys
 from pathlib import Path
@@ -15,13 +16,30 @@ from typing import Any
 
 import pytest
 
-EXAMPLES = sorted((Path(__file__).parents[2] / "examples").glob("*.py"))
+ROOT = Path(__file__).parents[2]
+EXAMPLES = sorted((ROOT / "examples").glob("*.py"))
 
 # Example -> result -> (value, relative tolerance), or text that must be in it.
-EXPECTED: dict[str, dict[str, tuple[float, float] | str]] = {}
+EXPECTED: dict[str, dict[str, tuple[float, float] | str]] = {
+    "size_a_drop_stream.py": {
+        # 30 % glycerol at 20 degC: Segur and Oberstar (1951) to the 2.5 % that is promised,
+        # Bosart and Snoddy (1927) to 0.06 %
+        "viscosity": (2.50e-3, 0.025),
+        "density": (1072.7, 0.0006),
+        # 3000 spheres of 600 um a second through 320 um: 2/3 d^3 f / D^2, by hand
+        "velocity": (4.21875, 1e-6),
+        # Rayleigh (1878): 4.508 jet diameters
+        "wavelength_rayleigh": (4.508 * 320e-6, 3e-4),
+        "frequency_rayleigh": (4.21875 / (4.508 * 320e-6), 3e-4),
+        # what was wanted comes out
+        "drop": (600e-6, 1e-9),
+    },
+}
 
 # Files that an example must leave behind, not empty, in the folder where it ran.
-WRITES: dict[str, list[str]] = {}
+WRITES: dict[str, list[str]] = {
+    "size_a_drop_stream.py": ["drop_stream.csv", "drop_stream.png"],
+}
 
 # An example must not load these: each costs a user up to a second.
 ENGINES = ["CoolProp", "thermo"]
@@ -55,7 +73,7 @@ def outcome(
     assert run.stderr == ""
     *printed, last = run.stdout.splitlines()
     assert "\n".join(printed).strip(), "an example prints what it found"
-    return request.param, folder, json.loads(last)
+    return request.param, folder, {**json.loads(last), "printed": printed}
 
 
 def test_there_are_examples() -> None:
@@ -87,6 +105,20 @@ def test_leaves_the_files_that_it_names(outcome: tuple[Path, Path, dict[str, Any
 def test_loads_no_engine(outcome: tuple[Path, Path, dict[str, Any]]) -> None:
     _, _, said = outcome
     assert said["engines"] == []
+
+
+def test_the_readme_quotes_the_first_job_as_it_is(
+    outcome: tuple[Path, Path, dict[str, Any]],
+) -> None:
+    example, _, said = outcome
+    if example.name != "size_a_drop_stream.py":
+        return
+    readme = (ROOT / "README.md").read_text(encoding="utf-8")
+    (quoted,) = re.findall(r"^```text\n(Wanted:.*?)^```", readme, re.MULTILINE | re.DOTALL)
+    printed = iter(" ".join(line.split()) for line in said["printed"])
+    for line in quoted.splitlines():
+        # In this order, with others between: `in` uses the lines up.
+        assert " ".join(line.split()) in printed, f"README.md quotes: {line}"
 
 
 def test_runs_as_a_script() -> None:

@@ -96,7 +96,7 @@ class EngineCurve:
         CAS registry number.
     name : str
         What the engine calls the chemical; for display only.
-    property : str
+    quantity : str
         The word of the interface, such as ``"viscosity"``.
     engine : str
         ``"CoolProp"`` or ``"thermo"``.
@@ -128,7 +128,7 @@ class EngineCurve:
 
     cas: str
     name: str
-    property: str
+    quantity: str
     engine: str
     version: str
     method: str
@@ -143,7 +143,7 @@ class EngineCurve:
 
     def __reduce__(self) -> tuple[Any, ...]:
         # The bodies hold closures; the engine is asked again where the pickle is read.
-        return (_again, (self.cas, self.property, self.method))
+        return (_again, (self.cas, self.quantity, self.method))
 
     @property
     def fast(self) -> Fast:
@@ -179,7 +179,7 @@ class EngineCurve:
             return math.nan
         if not self.range.low <= temperature <= self.range.high:
             raise OutOfRange(
-                f"{self.property} of {self.cas}: {temperature:g} K is outside what "
+                f"{self.quantity} of {self.cas}: {temperature:g} K is outside what "
                 f"{self.engine}'s {self.method} is stated for",
                 allowed=str(self.range),
                 hint="Engines are not extrapolated",
@@ -188,11 +188,11 @@ class EngineCurve:
             value = self.bodies[0](float(temperature))
         except (ArithmeticError, ValueError) as error:
             raise EngineError(
-                f"{self.label}: no {self.property} at {temperature:g} K ({error})"
+                f"{self.label}: no {self.quantity} at {temperature:g} K ({error})"
             ) from None
         if not 0.0 < value < math.inf:
             raise EngineError(
-                f"{self.label}: {self.property} at {temperature:g} K came out {value:g}"
+                f"{self.label}: {self.quantity} at {temperature:g} K came out {value:g}"
             )
         return value
 
@@ -225,7 +225,7 @@ class EngineCurve:
         """This method as it stands in a trail."""
         return RecordUse(
             record=self.label,
-            property=self.property,
+            property=self.quantity,
             form=self.form,
             grade=self.grade,
             sources=self.sources,
@@ -237,6 +237,11 @@ class EngineCurve:
 
 
 def _again(cas: str, prop: str, method: str) -> EngineCurve:
-    from dropkit.properties.engines import engine_curve
+    from dropkit.properties.engines import engine_curves
 
-    return engine_curve(cas, prop, method=method)
+    for curve in engine_curves(cas, prop):
+        if curve.method == method:
+            return curve
+    raise EngineError(
+        f"{method} no longer gives the {prop} of {cas}: the engines here are of another version"
+    )

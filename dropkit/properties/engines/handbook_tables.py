@@ -216,7 +216,7 @@ def handbook_row(key: str, cas: str) -> Mapping[str, str] | None:
 
 @cache
 def _molar_masses() -> Mapping[str, str]:
-    found = {}
+    found: dict[str, str] = {}
     for file in _IDENTIFIERS:
         for line in _lines("Identifiers", file):
             _, cas, _, mass, _ = line.split("\t", 4)

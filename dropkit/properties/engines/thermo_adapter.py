@@ -9,22 +9,15 @@ forms evaluate them, so that arrays cost what numpy costs.
 from __future__ import annotations
 
 from collections.abc import Callable, Mapping
-from typing import Any, Final, NamedTuple
+from typing import Final, NamedTuple
 
 from dropkit.errors import EngineError
+from dropkit.properties.engines import handbook_rows as rows
 from dropkit.properties.engines.engine_types import EngineCurve, inside_liquid
-from dropkit.properties.engines.handbook_forms import PPDS9
-from dropkit.properties.engines.handbook_tables import (
-    handbook_row,
-    handbook_versions,
-    molar_mass_of,
-)
-from dropkit.properties.equations import FORMS
+from dropkit.properties.engines.handbook_rows import HandbookEquation, equation_form
+from dropkit.properties.engines.handbook_tables import handbook_row, handbook_versions
 
 __all__ = ["METHODS", "REFUSED", "HandbookMethod", "handbook_curve"]
-
-_GAS_CONSTANT: Final = 8.31446261815324  # J/(mol K), exact in the SI
-_ATMOSPHERE: Final = 101325.0  # Pa
 
 # Methods of thermo that dropkit never uses, and why.
 REFUSED: Final[dict[str, str]] = {
@@ -45,18 +38,8 @@ REFUSED: Final[dict[str, str]] = {
     "REFPROP_FIT": "a fit to the equations that CoolProp evaluates itself",
     "COOLPROP": "asked directly, as method 'HEOS'",
     "VDI_TABULAR": "interpolates and extrapolates a coarse table",
+    "Fit 2023": "a fit of thermo's own whose measurements are not named",
 }
-
-
-class _Equation(NamedTuple):
-    """A row turned into an equation form, its parameters, and the limits that its source states."""
-
-    form: str
-    parameters: dict[str, Any]
-    low: float
-    high: float
-    critical_temperature: float | None = None
-    cautions: tuple[str, ...] = ()
 
 
 class HandbookMethod(NamedTuple):
@@ -64,7 +47,7 @@ class HandbookMethod(NamedTuple):
 
     Parameters
     ----------
-    property : str
+    quantity : str
         The word of the interface.
     method : str
         thermo's name of it.
@@ -81,207 +64,46 @@ class HandbookMethod(NamedTuple):
         Table of the source.
     """
 
-    property: str
+    quantity: str
     method: str
     table: str
-    read: Callable[[str, Mapping[str, str]], _Equation | None]
+    read: Callable[[str, Mapping[str, str]], HandbookEquation | None]
     uncertainty: float
     source: str
     place: str
 
 
-def _numbers(row: Mapping[str, str], *columns: str) -> list[float]:
-    return [float(row[column] or 0.0) for column in columns]
-
-
-def _stated(row: Mapping[str, str]) -> tuple[float, float] | None:
-    """The limits of a row, where it has both."""
-    low, high = row["Tmin"], row["Tmax"]
-    return (float(low), float(high)) if low and high else None
-
-
-# ------------------------------------------------ density
-def _perry_density(cas: str, row: Mapping[str, str]) -> _Equation | None:
-    limits, mass = _stated(row), molar_mass_of(cas)
-    if limits is None or mass is None:
-        return None
-    c = _numbers(row, "C1", "C2", "C3", "C4")
-    return _Equation("rackett", {"coefficients": c, "unit": mass}, *limits, c[2])
-
-
-def _vdi_density(cas: str, row: Mapping[str, str]) -> _Equation | None:
-    critical, *c = _numbers(row, "Tc", "rhoc", "A", "B", "C", "D")
-    powers = {
-        "coefficients": c,
-        "exponents": [0.0, 0.35, 2.0 / 3.0, 1.0, 4.0 / 3.0],
-        "critical_temperature": critical,
-    }
-    return _between_melting_and_boiling(cas, "critical_powers", powers, critical)
-
-
-# ------------------------------------------------ viscosity
-def _dippr101(cas: str, row: Mapping[str, str]) -> _Equation | None:
-    limits = _stated(row)
-    c = _numbers(row, "C1", "C2", "C3", "C4", "C5")
-    return None if limits is None else _Equation("dippr101", {"coefficients": c}, *limits)
-
-
-def _vdi_viscosity(cas: str, row: Mapping[str, str]) -> _Equation | None:
-    c = _numbers(row, "A", "B", "C", "D", "E")
-    return _between_melting_and_boiling(cas, "ppds9", {"coefficients": c}, None)
-
-
-# ------------------------------------------------ surface tension
-def _mulero(cas: str, row: Mapping[str, str]) -> _Equation | None:
-    limits = _stated(row)
-    critical, *c = _numbers(row, "Tc", "sigma0", "n0", "sigma1", "n1", "sigma2", "n2")
-    terms = [(s, n) for s, n in zip(c[::2], c[1::2], strict=True) if s]
-    parameters = {
-        "coefficients": [s for s, _ in terms],
-        "exponents": [n for _, n in terms],
-        "critical_temperature": critical,
-    }
-    if limits is None:
-        return None
-    return _Equation("critical_powers", parameters, *limits, critical)
-
-
-def _jasper(cas: str, row: Mapping[str, str]) -> _Equation | None:
-    limits = _stated(row)
-    at_zero, slope = _numbers(row, "a", "b")
-    line = {"coefficients": [at_zero, -slope], "centre": 273.15, "unit": 1e-3}
-    caution = (
-        "the limits are those of the copy, mostly melting and boiling point; Jasper's measured "
-        "temperatures are not carried"
-    )
-    if limits is None or at_zero - slope * (limits[1] - 273.15) <= 0.0:
-        return None
-    return _Equation("polynomial", line, *limits, None, (caution,))
-
-
-def _vdi_surface_tension(cas: str, row: Mapping[str, str]) -> _Equation | None:
-    melting, critical, *c = _numbers(row, "Tm", "Tc", "A", "B", "C", "D", "E")
-    parameters = {"coefficients": c, "critical_temperature": critical}
-    return _Equation("watson", parameters, melting, critical, critical)
-
-
-# ------------------------------------------------ vapour
-def _wagner(row: Mapping[str, str], exponents: list[float]) -> dict[str, Any]:
-    critical, pressure, *c = _numbers(row, "Tc", "Pc", "A", "B", "C", "D")
-    return {
-        "coefficients": c,
-        "exponents": exponents,
-        "critical_temperature": critical,
-        "critical_pressure": pressure,
-    }
-
-
-def _mcgarry(cas: str, row: Mapping[str, str]) -> _Equation | None:
-    if not row["Tmin"]:
-        return None
-    low, critical = _numbers(row, "Tmin", "Tc")
-    return _Equation("wagner", _wagner(row, [1.0, 1.5, 3.0, 6.0]), low, critical, critical)
-
-
-def _vdi_vapour_pressure(cas: str, row: Mapping[str, str]) -> _Equation | None:
-    melting, critical = _numbers(row, "Tm", "Tc")
-    return _Equation("wagner", _wagner(row, [1.0, 1.5, 2.5, 5.0]), melting, critical, critical)
-
-
-def _perry_heat_of_vaporisation(cas: str, row: Mapping[str, str]) -> _Equation | None:
-    limits, mass = _stated(row), molar_mass_of(cas)
-    if limits is None or mass is None:
-        return None
-    critical, *c = _numbers(row, "Tc", "C1", "C2", "C3", "C4")
-    parameters = {"coefficients": c, "critical_temperature": critical, "unit": 1.0 / mass}
-    return _Equation("watson", parameters, *limits, critical)
-
-
-def _vdi_heat_of_vaporisation(cas: str, row: Mapping[str, str]) -> _Equation | None:
-    critical, mass, *c = _numbers(row, "Tc", "MW", "A", "B", "C", "D", "E")
-    powers = {
-        "coefficients": c,
-        "exponents": [1.0 / 3.0, 2.0 / 3.0, 1.0, 2.0, 6.0],
-        "critical_temperature": critical,
-        "factor": _GAS_CONSTANT * critical,
-        "unit": 1e3 / mass,
-    }
-    return _between_melting_and_boiling(cas, "critical_powers", powers, critical)
-
-
-# ------------------------------------------------ the rest
-def _perry_heat_capacity(cas: str, row: Mapping[str, str]) -> _Equation | None:
-    limits, mass = _stated(row), molar_mass_of(cas)
-    if limits is None or mass is None:
-        return None
-    c = _numbers(row, "A", "B", "C", "D", "E")
-    return _Equation("polynomial", {"coefficients": c, "unit": 1e-3 / mass}, *limits)
-
-
-def _perry_conductivity(cas: str, row: Mapping[str, str]) -> _Equation | None:
-    limits = _stated(row)
-    c = _numbers(row, "C1", "C2", "C3", "C4", "C5")
-    return None if limits is None else _Equation("polynomial", {"coefficients": c}, *limits)
-
-
-def _vdi_conductivity(cas: str, row: Mapping[str, str]) -> _Equation | None:
-    c = _numbers(row, "A", "B", "C", "D", "E")
-    return _between_melting_and_boiling(cas, "polynomial", {"coefficients": c}, None)
-
-
-def _crc_permittivity(cas: str, row: Mapping[str, str]) -> _Equation | None:
-    limits = _stated(row)
-    c = _numbers(row, "A", "B", "C", "D")
-    return (
-        None
-        if limits is None or not c[0]
-        else _Equation("polynomial", {"coefficients": c}, *limits)
-    )
-
-
-def _between_melting_and_boiling(
-    cas: str, form: str, parameters: dict[str, Any], critical: float | None
-) -> _Equation | None:
-    """For tables without limits: the VDI's own melting point and boiling point at 1 atm."""
-    row = handbook_row("vdi vapour pressure", cas)
-    if row is None:
-        return None
-    equation = _vdi_vapour_pressure(cas, row)
-    assert equation is not None
-    pressure = FORMS[equation.form].scalar(equation.parameters)
-    low, high = equation.low, 0.999 * equation.high
-    if not pressure(low) < _ATMOSPHERE < pressure(high):
-        return None
-    for _ in range(60):
-        middle = 0.5 * (low + high)
-        low, high = (middle, high) if pressure(middle) < _ATMOSPHERE else (low, middle)
-    caution = (
-        "the table states no limits: taken from the melting point to the boiling point at "
-        "1 atm, both from the same handbook"
-    )
-    # To a tenth of a kelvin, inwards: the last digits would claim too much.
-    boiling = int(10.0 * low) / 10.0
-    return _Equation(form, parameters, equation.low, boiling, critical, (caution,))
-
-
 _PERRY: Final = "PerryGreen2008"
 _VDI: Final = "VDIHeatAtlas2010"
+# In order of preference within a property.
 METHODS: Final[tuple[HandbookMethod, ...]] = (
     HandbookMethod(
-        "density", "DIPPR_PERRY_8E", "perry density", _perry_density, 0.003, _PERRY, "table 2-32"
+        "density", "VDI_PPDS", "vdi density", rows.vdi_density, 0.002, _VDI, "section D3, density"
     ),
     HandbookMethod(
-        "density", "VDI_PPDS", "vdi density", _vdi_density, 0.003, _VDI, "section D3, density"
+        "density",
+        "DIPPR_PERRY_8E",
+        "perry density",
+        rows.perry_density,
+        0.003,
+        _PERRY,
+        "table 2-32",
     ),
     HandbookMethod(
-        "viscosity", "DIPPR_PERRY_8E", "perry viscosity", _dippr101, 0.05, _PERRY, "table 2-313"
+        "viscosity",
+        "DIPPR_PERRY_8E",
+        "perry viscosity",
+        rows.perry_logarithmic,
+        0.035,
+        _PERRY,
+        "table 2-313",
     ),
     HandbookMethod(
         "viscosity",
         "VDI_PPDS",
         "vdi viscosity",
-        _vdi_viscosity,
-        0.05,
+        rows.vdi_viscosity,
+        0.035,
         _VDI,
         "section D3, dynamic viscosity of saturated liquids",
     ),
@@ -289,7 +111,7 @@ METHODS: Final[tuple[HandbookMethod, ...]] = (
         "surface_tension",
         "REFPROP",
         "mulero surface tension",
-        _mulero,
+        rows.mulero_tension,
         0.015,
         "Mulero2012",
         "recommended correlations, with their continuation of 2014",
@@ -298,7 +120,7 @@ METHODS: Final[tuple[HandbookMethod, ...]] = (
         "surface_tension",
         "JASPER",
         "jasper surface tension",
-        _jasper,
+        rows.jasper_tension,
         0.015,
         "Jasper1972",
         "straight lines as reprinted in Lange's Handbook",
@@ -307,62 +129,62 @@ METHODS: Final[tuple[HandbookMethod, ...]] = (
         "surface_tension",
         "VDI_PPDS",
         "vdi surface tension",
-        _vdi_surface_tension,
+        rows.vdi_tension,
         0.02,
         _VDI,
         "section D3, surface tension",
     ),
     HandbookMethod(
         "vapour_pressure",
-        "WAGNER_MCGARRY",
-        "mcgarry vapour pressure",
-        _mcgarry,
-        0.015,
-        "McGarry1983",
-        "Wagner constants",
+        "VDI_PPDS",
+        "vdi vapour pressure",
+        rows.vdi_pressure,
+        0.01,
+        _VDI,
+        "section D3, vapour pressure",
     ),
     HandbookMethod(
         "vapour_pressure",
         "DIPPR_PERRY_8E",
         "perry vapour pressure",
-        _dippr101,
-        0.02,
+        rows.perry_logarithmic,
+        0.015,
         _PERRY,
         "table 2-8",
     ),
     HandbookMethod(
         "vapour_pressure",
-        "VDI_PPDS",
-        "vdi vapour pressure",
-        _vdi_vapour_pressure,
-        0.02,
-        _VDI,
-        "section D3, vapour pressure",
-    ),
-    HandbookMethod(
-        "heat_of_vaporisation",
-        "DIPPR_PERRY_8E",
-        "perry heat of vaporisation",
-        _perry_heat_of_vaporisation,
-        0.02,
-        _PERRY,
-        "table 2-150",
+        "WAGNER_MCGARRY",
+        "mcgarry vapour pressure",
+        rows.mcgarry_pressure,
+        0.015,
+        "McGarry1983",
+        "Wagner constants",
     ),
     HandbookMethod(
         "heat_of_vaporisation",
         "VDI_PPDS",
         "vdi heat of vaporisation",
-        _vdi_heat_of_vaporisation,
-        0.02,
+        rows.vdi_heat_of_vaporisation,
+        0.01,
         _VDI,
         "section D3, enthalpy of vaporization",
+    ),
+    HandbookMethod(
+        "heat_of_vaporisation",
+        "DIPPR_PERRY_8E",
+        "perry heat of vaporisation",
+        rows.perry_heat_of_vaporisation,
+        0.03,
+        _PERRY,
+        "table 2-150",
     ),
     HandbookMethod(
         "heat_capacity",
         "DIPPR_PERRY_8E",
         "perry heat capacity",
-        _perry_heat_capacity,
-        0.02,
+        rows.perry_heat_capacity,
+        0.04,
         _PERRY,
         "table 2-153",
     ),
@@ -370,8 +192,8 @@ METHODS: Final[tuple[HandbookMethod, ...]] = (
         "thermal_conductivity",
         "DIPPR_PERRY_8E",
         "perry thermal conductivity",
-        _perry_conductivity,
-        0.03,
+        rows.perry_conductivity,
+        0.05,
         _PERRY,
         "table 2-315",
     ),
@@ -379,8 +201,8 @@ METHODS: Final[tuple[HandbookMethod, ...]] = (
         "thermal_conductivity",
         "VDI_PPDS",
         "vdi thermal conductivity",
-        _vdi_conductivity,
-        0.03,
+        rows.vdi_conductivity,
+        0.05,
         _VDI,
         "section D3, thermal conductivity of saturated liquids",
     ),
@@ -388,7 +210,7 @@ METHODS: Final[tuple[HandbookMethod, ...]] = (
         "static_permittivity",
         "CRC",
         "crc static permittivity",
-        _crc_permittivity,
+        rows.crc_permittivity,
         0.02,
         "CRCHandbook2014",
         "Permittivity of Liquids",
@@ -419,7 +241,7 @@ def handbook_curve(cas: str, method: HandbookMethod) -> EngineCurve | None:
     Examples
     --------
     >>> curve = handbook_curve("67-66-3", METHODS[2])
-    >>> curve.property, curve.method
+    >>> curve.quantity, curve.method
     ('viscosity', 'DIPPR_PERRY_8E')
     """
     row = handbook_row(method.table, cas)
@@ -437,12 +259,12 @@ def handbook_curve(cas: str, method: HandbookMethod) -> EngineCurve | None:
     limits = inside_liquid(equation.low, equation.high, equation.critical_temperature)
     if limits is None:
         return None
-    form = PPDS9 if equation.form == "ppds9" else FORMS[equation.form]
+    form = equation_form(equation.form)
     bodies = (form.scalar(equation.parameters), form.array(equation.parameters))
     return EngineCurve(
         cas=cas,
         name=next(row[c] for c in ("Chemical", "Name", "Fluid") if c in row).strip(),
-        property=method.property,
+        quantity=method.quantity,
         engine="thermo",
         version=handbook_versions(),
         method=method.method,
