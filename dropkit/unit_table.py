@@ -127,8 +127,8 @@ def _marks(*marks: str) -> frozenset[str]:
     return frozenset(marks)
 
 
-# Windows run from light hydrocarbons to molten metals and silicates' thin end; they are
-# practice limits of this project, not data: `plausible=False` lets anything pass.
+# Windows run from liquefied light hydrocarbons to molten metals. They are practice limits
+# of this project, set by judgement, not data: `plausible=False` lets anything pass.
 KINDS: Final[dict[str, Kind]] = _kinds(
     Kind("ratio", NONE, "", "", 1.0, "any", accepts=_marks("percent", "mass", "mole", "volume"),
          words="a pure number"),

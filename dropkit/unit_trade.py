@@ -213,11 +213,11 @@ for _name, _factor in (("bar", Fraction(100000)), ("mbar", Fraction(100)), ("psi
 
 NEEDLE_WORDS: Final = frozenset({"-gauge", "G", "Ga", "ga", "gauge", "Gauge", "gage"})
 
-# Nominal inner diameter [um] of regular-wall hypodermic tubing by gauge number. Seen in two
-# copies of a public "needle gauge comparison chart" (encyclopedia article, 2011-2013 state);
-# the table of ISO 9626 itself was not seen. It fixes outer diameters and the smallest inner
-# diameter allowed, so a bought needle may differ by several per cent and thin-wall ones by
-# far more. Numbers above 31 were cut off in both copies and are refused.
+# Nominal inner diameter [um] of regular-wall hypodermic tubing by gauge number, as in the
+# Wikipedia article "Needle gauge comparison chart" and a copy of it (en.wikipedia.org,
+# freebooknotes.com); both were seen up to number 31, so that higher numbers are refused. The
+# table of ISO 9626 itself was not seen; it sets outer diameters and the smallest bore
+# [from memory], so a bought needle can differ by several per cent, a thin-wall one by more.
 NEEDLE_GAUGES: Final[dict[int, int]] = {
     7: 3810, 8: 3429, 9: 2997, 10: 2692, 11: 2388, 12: 2159, 13: 1803, 14: 1600,
     15: 1372, 16: 1194, 17: 1067, 18: 838, 19: 686, 20: 603, 21: 514, 22: 413,

@@ -10,6 +10,7 @@ Run it:  python examples/size_a_drop_stream.py [folder for the table and the pic
 from __future__ import annotations
 
 import sys
+import textwrap
 from pathlib import Path
 from typing import Any
 
@@ -20,6 +21,8 @@ from dropkit.models import jet
 WANTED_DROP, WANTED_RATE = 600e-6, 3000.0
 NOZZLE = 320e-6
 GLYCEROL, TEMPERATURE = 0.30, 293.15
+
+NUMBERS = ["weber", "reynolds", "ohnesorge", "capillary", "bond", "froude"]
 
 
 def carrier(glycerol: float = GLYCEROL) -> Any:
@@ -101,11 +104,13 @@ def main(folder: str | Path = ".") -> dict[str, float]:
     print(f"{1e6 * NOZZLE:g} um, which takes {6e7 * flow:.4g} mL/min.\n")
     print(state)
     print("\nSources")
-    print(dk.cite(state))
+    for line in dk.cite(state).splitlines():
+        print(textwrap.fill(line, 98, initial_indent="- ", subsequent_indent="  "))
 
     base = stream(GLYCEROL, TEMPERATURE, flow)
-    print("\nNumbers")
-    print(state.numbers(NOZZLE, base["velocity"]))
+    print("\nNumbers, on the diameter of the hole")
+    sheet = state.numbers(NOZZLE, base["velocity"]).table()
+    print(sheet.loc[NUMBERS, ["value", "compares"]].to_string(float_format="{:.4g}".format))
 
     cases = {
         "as set": base,
@@ -153,7 +158,7 @@ def main(folder: str | Path = ".") -> dict[str, float]:
         "the jet is taken as wide as the hole: true of short nozzles only",
         "a line under pressure: follow the maker's limits, local codes and licensed practice",
     ):
-        print(f"- {text}")
+        print(textwrap.fill(text, 98, initial_indent="- ", subsequent_indent="  "))
 
     table.to_csv(folder / "drop_stream.csv", index_label="quantity")
     picture(folder / "drop_stream.png", cases)

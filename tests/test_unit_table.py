@@ -69,7 +69,7 @@ def test_windows_and_slips_are_consistent(kind: Kind) -> None:
 
 
 # Measured liquids at 1 atm, light to heavy: none of them may look implausible.
-# Water: IAPWS R6-95, R12-08, R1-76 at 293.15 K; mercury: CRC Handbook; the rest [from memory].
+# Water: IAPWS R6-95, R12-08 and R1-76 at 293.15 K; all others [from memory].
 LIQUIDS = {
     "water": (998.2, 1.0016e-3, 0.07274, 293.15),
     "glycerol": (1261.1, 1.41, 0.0634, 293.15),

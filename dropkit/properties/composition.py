@@ -187,9 +187,12 @@ def read_composition(
         fractions = _complete(names, values, rest, normalise)
     if len(names) == 1 and rest:
         fractions = [1.0]
-    mass = to_mass(names, fractions, basis, kelvin)
+    # Fractions by mass with a rest add up to one as they are.
+    done = basis == "mass" and bool(rest)
+    mass = tuple(fractions) if done else to_mass(names, fractions, basis, kelvin)
     shape = np.broadcast_shapes(*(np.shape(value) for value in mass))
     if shape:
+        # A copy of what the user gave: it may change later.
         mass = tuple(np.array(np.broadcast_to(value, shape), dtype=float) for value in mass)
     else:
         mass = tuple(float(value) for value in mass)
@@ -272,6 +275,8 @@ def _check_each(names: Sequence[str], values: Sequence[Any], what: str) -> None:
         if value is None:
             continue
         array = np.asarray(value, dtype=float)
+        if array.size and array.min() >= 0.0 and array.max() < np.inf:
+            continue  # NaN fails both
         if np.isnan(array).any():
             raise CompositionError(f"The {what} of {key} is NaN", allowed="finite numbers >= 0")
         if np.isinf(array).any() or (array < 0).any():
@@ -297,18 +302,20 @@ def _complete(names: Sequence[str], values: Sequence[Any], rest: str, normalise:
     _check_each(names, values, "fraction")
     given = [value for value in values if value is not None]
     try:
-        total = np.asarray(sum(given) if given else 0.0, dtype=float)
+        total = np.asarray(sum(given[1:], start=given[0]) if given else 0.0, dtype=float)
     except ValueError as problem:
         raise CompositionError("The fractions have shapes that don't fit together") from problem
     percent = _looks_like_percent(total, rest)
     if rest:
-        if (total > 1.0 + EXACT).any():
+        if total.size and total.max() > 1.0 + EXACT:
             raise CompositionError(
                 f"The fractions without the rest add up to {_where(total, total.max())}",
                 allowed="at most 1",
                 hint=percent,
             )
-        share = np.maximum(1.0 - total, 0.0)
+        share = 1.0 - total
+        if share.min() < 0.0:
+            share = np.maximum(share, 0.0)
         remainder: Any = share if share.ndim else float(share)
         return [remainder if value is None else value for value in values]
     miss = np.abs(total - 1.0)

@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 import warnings
-from collections.abc import Callable
+from collections.abc import Callable, Sequence
 from typing import TYPE_CHECKING, Any, Final, overload
 
 import numpy as np
@@ -18,6 +18,7 @@ from dropkit.errors import (
 )
 from dropkit.properties.curves import CHUNK, Fast, FloatArray
 from dropkit.provenance import Grade, Trail, worst_grade
+from dropkit.records import PropertyRecord
 from dropkit.validity import Outside, Range, check_outside, settle
 
 if TYPE_CHECKING:
@@ -101,6 +102,10 @@ class Fluid:
     def _trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
         raise NotImplementedError
 
+    def _blocks(self, prop: str) -> Sequence[PropertyRecord]:
+        """The records that a property rests on, at whatever temperature."""
+        raise NotImplementedError
+
     def _shape(self) -> tuple[int, ...]:
         """Shape of the composition; () for one composition."""
         return ()
@@ -140,7 +145,7 @@ class Fluid:
         if prop in self._looked or prop not in self.available():
             return
         self._looked.add(prop)
-        used = [r.record for r in self._trail(prop, None).records if r.grade == "recalled"]
+        used = [block.label for block in self._blocks(prop) if block.grade == "recalled"]
         if used:
             warnings.warn(
                 f"{prop} of {self.name} rests on memory ({', '.join(used)}; grade 'recalled'): "

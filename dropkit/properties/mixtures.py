@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 import warnings
-from collections.abc import Callable, Mapping
+from collections.abc import Callable, Mapping, Sequence
 from typing import Any, Final, Literal
 
 import numpy as np
@@ -275,6 +275,13 @@ class Mixture(Fluid):
         if {"density", "viscosity"} <= held:
             held.add("kinematic_viscosity")
         return tuple(prop for prop in PROPERTIES if prop in held)
+
+    def _blocks(self, prop: str) -> Sequence[records.PropertyRecord]:
+        if self._pure is not None:
+            return self._pure._blocks(prop)
+        if prop == "kinematic_viscosity":
+            return (*self._blocks("viscosity"), *self._blocks("density"))
+        return self._need(prop).serving(self._mass, None)
 
     def _range(self, prop: str) -> Range:
         if self._pure is not None:

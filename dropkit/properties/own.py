@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 import math
-from collections.abc import Callable, Mapping
+from collections.abc import Callable, Mapping, Sequence
 from dataclasses import dataclass
 from itertools import pairwise
 from typing import Any, Final
@@ -17,6 +17,7 @@ from dropkit.properties.curves import FloatArray
 from dropkit.properties.interface import PROPERTIES, Fluid, property_name
 from dropkit.properties.pure import quotient_trail, versions
 from dropkit.provenance import Trail
+from dropkit.records import PropertyRecord
 from dropkit.validity import Range
 
 __all__ = ["OwnFluid", "fluid", "overlay"]
@@ -248,6 +249,12 @@ class OwnFluid(Fluid):
                 )
             return Range(low, high)
         return self._from_base()._range(prop)
+
+    def _blocks(self, prop: str) -> Sequence[PropertyRecord]:
+        route = self._route(prop)
+        if route in ("product", "quotient"):
+            return [block for part in self._parts(prop) for block in self._blocks(part)]
+        return () if route == "own" else self._from_base()._blocks(prop)
 
     def _shape(self) -> tuple[int, ...]:
         return self._base._shape() if self._base is not None else ()

@@ -24,7 +24,7 @@ class Points:
     Parameters
     ----------
     source : str
-        Name of the file, which is the key of its source.
+        Key of its source.
     temperature, value : ndarray
         Temperature [K] and value [SI].
     fraction : ndarray
@@ -90,6 +90,11 @@ def _same(listed: str, given: str) -> bool:
     return given != "" and abs(float(listed) - float(given)) <= 1e-6 * abs(float(given))
 
 
+def _source(name: str) -> str:
+    """Key of a file's source: its name up to the first underscore."""
+    return name.rpartition("/")[2].partition("_")[0]
+
+
 def _files(blocks: Iterable[PropertyRecord]) -> list[str]:
     return list(dict.fromkeys(name for block in blocks for name in block.points))
 
@@ -104,7 +109,7 @@ def pure_points(key: str, prop: str) -> Iterator[Points]:
         ]
         if chosen:
             yield Points(
-                name.rpartition("/")[2],
+                _source(name),
                 np.array([float(row["T_K"]) for row in chosen]),
                 np.array([float(row["value"]) for row in chosen]),
                 np.full(len(chosen), np.nan),
@@ -126,7 +131,7 @@ def pair_points(first: str, second: str, prop: str) -> Iterator[Points]:
         for basis in sorted({row["basis"] for row in chosen}):
             mine = [row for row in chosen if row["basis"] == basis]
             yield Points(
-                name.rpartition("/")[2],
+                _source(name),
                 np.array([float(row["T_K"]) for row in mine]),
                 np.array([float(row["value"]) for row in mine]),
                 np.array([float(row["fraction_1"]) for row in mine]),

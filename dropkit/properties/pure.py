@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from collections.abc import Callable
+from collections.abc import Callable, Sequence
 from typing import Any
 
 import numpy as np
@@ -151,6 +151,12 @@ class Liquid(Fluid):
             blocks = self.record.properties[prop]
             self._curves[name] = Curve(blocks, inside_mixtures=inside_mixtures)
         return self._curves[name]
+
+    def _blocks(self, prop: str) -> Sequence[records.PropertyRecord]:
+        held = self.record.properties
+        if prop == "kinematic_viscosity":
+            return (*held["viscosity"], *held["density"])
+        return held[prop]
 
     def _range(self, prop: str) -> Range:
         if prop == "kinematic_viscosity":

@@ -29,12 +29,12 @@ _ROOM: Final = 298.15  # K
 _WINDOW: Final = (263.15, 423.15)  # K
 _ATMOSPHERE: Final = 101325.0  # Pa
 
-# Beyond this relative difference of two methods neither is believed.
+# Beyond this relative difference of two methods (larger over smaller, less one) neither is believed.
 _CONTRADICTION: Final = {
     "density": 0.03,
     "viscosity": 0.3,
     "surface_tension": 0.1,
-    "vapour_pressure": 0.3,
+    "vapour_pressure": 0.6,
     "heat_of_vaporisation": 0.15,
     "heat_capacity": 0.2,
     "thermal_conductivity": 0.2,
@@ -98,7 +98,7 @@ def engine_curve(cas: str, prop: str, *, method: str | None = None) -> EngineCur
     chosen, contradiction = _compared(chosen, every)
     if contradiction:
         raise EngineError(
-            f"No trustworthy {prop} of {cas} from an engine: {contradiction}",
+            f"No trustworthy {prop} of {cas} ({chosen.name}) from an engine: {contradiction}",
             hint="engine_curves() gives both; measured values go in with dropkit.fluid()",
         )
     return _with_phase(chosen)
@@ -277,7 +277,8 @@ def _compared(curve: EngineCurve, every: list[EngineCurve]) -> tuple[EngineCurve
             f"{temperature:.0f} K"
         )
         uncertainty = max(uncertainty, 0.5 * abs(difference))
-        if curve.grade != "estimated" and abs(difference) > _CONTRADICTION[curve.quantity]:
+        apart = math.expm1(abs(math.log1p(difference)))
+        if curve.grade != "estimated" and apart > _CONTRADICTION[curve.quantity]:
             contradiction = f"{curve.engine}'s {curve.method} is contradicted: {text}"
         cautions.append(f"methods differ: {text}")
     if tuple(cautions) == curve.cautions:
@@ -301,9 +302,11 @@ def _difference(curve: EngineCurve, other: EngineCurve) -> tuple[float, float]:
     """The largest relative difference of another curve where both hold, and its temperature."""
     low = max(curve.range.low, other.range.low)
     # Clear of the critical point, where values vanish and percentages mean little.
-    high = min(curve.range.high, other.range.high) - 0.1 * min(curve.range.high, other.range.high)
+    high = 0.9 * min(curve.range.high, other.range.high)
     if max(low, _WINDOW[0]) < min(high, _WINDOW[1]):
         low, high = max(low, _WINDOW[0]), min(high, _WINDOW[1])
+    else:  # a gas at room temperature: not down at its melting point either
+        low = 0.5 * (low + high)
     if not low < high:
         return 0.0, low
     temperature = np.linspace(low, high, 5)

@@ -36,6 +36,7 @@ REFUSED: Final[dict[str, str]] = {
     "EOS": "a cubic equation of state",
     "HEOS_FIT": "a fit to the equation of state that CoolProp evaluates itself",
     "REFPROP_FIT": "a fit to the equations that CoolProp evaluates itself",
+    "HEOS": "CoolProp is not asked for it; its surface tension stands as REFPROP, with limits",
     "COOLPROP": "asked directly, as method 'HEOS'",
     "VDI_TABULAR": "interpolates and extrapolates a coarse table",
     "Fit 2023": "a fit of thermo's own whose measurements are not named",

@@ -6,7 +6,6 @@ a record enters without excess, and the property is an estimate.
 
 from __future__ import annotations
 
-import tomllib
 from collections.abc import Callable, Sequence
 from functools import cache
 from itertools import combinations, pairwise
@@ -43,6 +42,9 @@ def blend(prop: str, keys: tuple[str, ...]) -> Blend:
 @cache
 def estimate_errors() -> dict[str, Any]:
     """Measured errors of estimates on pairs that were hidden from the rule."""
+    # Imported here: fitted mixtures do without.
+    import tomllib
+
     path = records.data_dir() / "mixtures-estimates.toml"
     return tomllib.loads(path.read_text(encoding="utf-8"))
 
