@@ -347,7 +347,8 @@ class State:
         rows: list[tuple[str, ...]] = []
         for prop, value, trail, reason in self._given():
             if trail is None:
-                rows.append((prop, "", "", "", reason, "", "", ""))
+                short = "out of range" if "out of range" in reason else "not to be had"
+                rows.append((prop, short, "", "", reason, "", "", ""))
                 continue
             shown = display.in_stock(prop, value) if self._with_units else value
             spread = "" if trail.uncertainty is None else f"+-{200 * trail.uncertainty:.2g} %"
