@@ -16,6 +16,8 @@ from collections.abc import Iterable
 from dataclasses import asdict, dataclass, field
 from typing import Any, Final, Literal, TypeAlias
 
+from dropkit.errors import BadInput
+
 __all__ = ["GRADES", "Grade", "RecordUse", "Source", "Trail", "cite", "worst_grade"]
 
 Grade: TypeAlias = Literal["reference", "measured", "own", "single", "recalled", "estimated"]
@@ -195,6 +197,8 @@ def cite(*results: Any) -> str:
     ------
     UnknownName
         For a source key without a record.
+    BadInput
+        For something that rests on no source.
 
     Examples
     --------
@@ -207,7 +211,12 @@ def cite(*results: Any) -> str:
 
     keys: dict[str, None] = {}
     for result in results:
-        found = (result,) if isinstance(result, str) else result.sources
+        found = (result,) if isinstance(result, str) else getattr(result, "sources", None)
+        if found is None:
+            raise BadInput(
+                f"{type(result).__name__} has no sources to cite",
+                allowed="liquids, mixtures, states, gases, results, or source keys as text",
+            )
         keys.update(dict.fromkeys(found() if callable(found) else found))
     lines = []
     for key in keys:

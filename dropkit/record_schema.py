@@ -222,7 +222,7 @@ def _checks(reader: _Reader, limits: Range, *, pair: bool) -> tuple[Table, ...]:
     rows = reader.data.get("checks")
     if not _tables(rows):
         reader.fail("checks", "has no check point", "at least one { T, value, source, tolerance }")
-    keys = ("T", "value", "source", "place", "tolerance")
+    keys: tuple[str, ...] = ("T", "value", "source", "place", "tolerance")
     if pair:
         keys = (*keys, "fraction")
     for number, row in enumerate(rows, 1):

@@ -38,7 +38,7 @@ from dropkit.validity import Domain
 if TYPE_CHECKING:
     from dropkit.unit_text import Scale
 
-__all__ = ["Asked", "give", "kelvin_hint", "read", "to_si"]
+__all__ = ["Asked", "give", "kelvin_hint", "read", "single", "to_si"]
 
 _DEEPEST: Final = 16  # levels of nested lists
 
@@ -362,6 +362,41 @@ def to_si(value: Any, kind: str | Kind, name: str = "value", **options: Any) -> 
     0.0042
     """
     return read(value, kind, name, **options)[0]
+
+
+def single(value: Any, kind: str | Kind, name: str = "value", **options: Any) -> float:
+    """SI value of one number in any form; see :func:`read`.
+
+    Parameters
+    ----------
+    value : float, str, tuple or Quantity
+        One number; a bare one is SI.
+    kind : str
+        Name of the kind or argument word.
+    name : str
+        How an error calls the argument.
+    **options
+        ``domain`` and ``plausible`` of :func:`read`.
+
+    Returns
+    -------
+    float
+        The SI value.
+
+    Raises
+    ------
+    BadInput
+        For several numbers, for NaN, and as :func:`read` does.
+
+    Examples
+    --------
+    >>> single("25 degC", "temperature", "at")
+    298.15
+    """
+    number = read(value, kind, name, **options)[0]
+    if type(number) is not float or number != number:
+        raise BadInput(f"{name} is {shown(value)}", allowed="one number, not NaN")
+    return number
 
 
 def give(si: Any, kind: str | Kind, asked: Asked | None) -> Any:

@@ -75,7 +75,7 @@ def property_over_temperature(
         limits = item.range(property)
         low, high = limits.low, limits.high
         if between is not None:
-            low, high = (float(units.to_si(end, "temperature", "between")) for end in between)
+            low, high = (units.single(end, "temperature", "between") for end in between)
         if not np.isfinite(high):
             low, high = 273.15, 373.15
         kelvin = np.linspace(low, high, 301)

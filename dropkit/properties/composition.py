@@ -173,7 +173,7 @@ def read_composition(
     kind = kinds.pop() if kinds else "fraction"
     basis, from_unit = _basis(kind, by)
     assumptions: list[str] = []
-    kelvin = float(units.to_si(measured_at, "temperature", "measured_at"))
+    kelvin = units.single(measured_at, "temperature", "measured_at")
     if basis == "volume":
         assumptions.append(f"volumes before mixing, measured at {kelvin - 273.15:g} degC")
     if from_unit and rest:

@@ -307,8 +307,11 @@ def _component(name: str, unit: str | None) -> str | None:
 
 
 def _numbers(column: Any, header: Any) -> FloatArray:
-    if column.dtype == bool:
-        raise BadInput(f"The column {header!r} holds booleans", allowed="numbers")
+    # Columns of mixed types hide booleans and complex numbers behind "object".
+    mixed = column.dtype == object
+    odd = any(isinstance(x, bool | np.bool_ | complex) for x in column) if mixed else False
+    if odd or column.dtype.kind in "bcmM":
+        raise BadInput(f"The column {header!r} holds {column.dtype}", allowed="real numbers")
     try:
         numbers = np.asarray(column, dtype=float)
     except (TypeError, ValueError) as problem:

@@ -157,7 +157,7 @@ def overlay(base: Fluid, values: Mapping[str, Any], *, at: Any, plausible: bool)
         raise BadInput("viscosity and kinematic_viscosity are both given", allowed="one of the two")
     trends = {}
     if at is not None:
-        kelvin = float(units.to_si(at, "temperature", "at"))
+        kelvin = units.single(at, "temperature", "at")
         for prop, curve in curves.items():
             scalar = base._shape() == () and len(curve.values) == 1
             if scalar and prop in base.available():
@@ -358,16 +358,14 @@ class OwnFluid(Fluid):
 
 
 def _spread(prop: str, value: Any) -> float:
-    number = float(units.to_si(value, "ratio", f"uncertainty of {prop}"))
+    number = units.single(value, "ratio", f"uncertainty of {prop}")
     if not 0.0 <= number < 1.0:
         raise BadInput(f"The uncertainty of {prop} is {number:g}", allowed="relative, 0 to 1")
     return number
 
 
 def _read(values: Mapping[str, Any], at: Any, plausible: bool) -> dict[str, OwnCurve]:
-    where = None if at is None else float(units.to_si(at, "temperature", "at"))
-    if where is not None and math.isnan(where):
-        raise BadInput("at is NaN", allowed="a temperature")
+    where = None if at is None else units.single(at, "temperature", "at")
     return {
         property_name(prop): _read_one(prop, value, where, plausible)
         for prop, value in values.items()
@@ -377,22 +375,17 @@ def _read(values: Mapping[str, Any], at: Any, plausible: bool) -> dict[str, OwnC
 def _read_one(prop: str, value: Any, at: float | None, plausible: bool) -> OwnCurve:
     pairs = _as_pairs(value)
     if pairs is None:
-        number = units.to_si(value, prop, prop, plausible=plausible)
-        if not isinstance(number, float) or math.isnan(number):
-            raise BadInput(
-                f"{prop} of a fluid is {value!r}",
-                allowed="one number, one with a unit, or a list of (temperature, value) pairs",
-            )
+        number = units.single(value, prop, prop, plausible=plausible)
         return OwnCurve(prop, () if at is None else (at,), (number,))
     known = sorted(
         (
-            float(units.to_si(t, "temperature", f"temperature of {prop}")),
-            float(units.to_si(y, prop, prop, plausible=plausible)),
+            units.single(t, "temperature", f"temperature of {prop}"),
+            units.single(y, prop, prop, plausible=plausible),
         )
         for t, y in pairs
     )
-    if not known or any(math.isnan(t) or math.isnan(y) for t, y in known):
-        raise BadInput(f"{prop} has no pairs or a NaN among them")
+    if not known:
+        raise BadInput(f"{prop} has no pairs", allowed="at least one (temperature, value) pair")
     for (first, _), (second, _) in pairwise(known):
         if first == second:
             raise BadInput(f"{prop} is given twice at {first:g} K", allowed="one value each")

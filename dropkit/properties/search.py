@@ -145,9 +145,7 @@ def find(
         return _by_temperature(fluid, prop, value, at, between, in_units)
     if at is None:
         raise BadInput("find needs at=, the temperature", allowed="such as at='20 degC'")
-    kelvin = units.to_si(at, "temperature", "at")
-    if not isinstance(kelvin, float) or np.isnan(kelvin):
-        raise BadInput(f"at is {at!r}", allowed="one temperature")
+    kelvin = units.single(at, "temperature", "at")
     if not isinstance(fluid, Mixture):
         raise BadInput(
             f"{fluid.name} has no composition to vary",
@@ -252,8 +250,8 @@ def _ends(between: Any, kind: str, allowed: tuple[float, float]) -> tuple[float,
         first, second = between
     except (TypeError, ValueError) as problem:
         raise BadInput(f"between is {between!r}", allowed="a pair of ends") from problem
-    low = float(units.to_si(first, kind, "between"))
-    high = float(units.to_si(second, kind, "between"))
+    low = units.single(first, kind, "between")
+    high = units.single(second, kind, "between")
     if not allowed[0] <= low < high <= allowed[1]:
         raise BadInput(
             f"between runs from {low:g} to {high:g}",

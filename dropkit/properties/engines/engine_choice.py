@@ -9,7 +9,7 @@ from typing import Final
 
 import numpy as np
 
-from dropkit.errors import EngineError, MissingProperty, nearest
+from dropkit.errors import BadInput, EngineError, MissingProperty, nearest
 from dropkit.properties.engines.coolprop_adapter import (
     COOLPROP_LETTERS,
     COOLPROP_METHOD,
@@ -67,7 +67,7 @@ def engine_curve(cas: str, prop: str, *, method: str | None = None) -> EngineCur
     Raises
     ------
     BadInput
-        If `cas` is no CAS number.
+        If `cas` is no CAS number, or `method` no text.
     UnknownName
         If `prop` is no property.
     MissingProperty
@@ -217,6 +217,8 @@ def _check_method(prop: str, method: str) -> None:
     listed = [m.method for m in METHODS if m.quantity == prop]
     if prop in COOLPROP_LETTERS:
         listed.insert(0, COOLPROP_METHOD)
+    if not isinstance(method, str):
+        raise BadInput(f"method={method!r} is no name of a method", allowed=", ".join(listed))
     if method in listed:
         return
     why = REFUSED.get(
@@ -278,7 +280,7 @@ def _compared(curve: EngineCurve, every: list[EngineCurve]) -> tuple[EngineCurve
         )
         uncertainty = max(uncertainty, 0.5 * abs(difference))
         apart = math.expm1(abs(math.log1p(difference)))
-        if curve.grade != "estimated" and apart > _CONTRADICTION[curve.quantity]:
+        if curve.grade != "estimated" and apart > _CONTRADICTION.get(curve.quantity, 0.1):
             contradiction = f"{curve.engine}'s {curve.method} is contradicted: {text}"
         cautions.append(f"methods differ: {text}")
     if tuple(cautions) == curve.cautions:

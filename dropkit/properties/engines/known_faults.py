@@ -210,6 +210,20 @@ LIMITED: Final[tuple[Limit, ...]] = (
 
 WIDER: Final[tuple[Widening, ...]] = (
     Widening(
+        "112-30-1",  # 1-decanol
+        "density",
+        "DIPPR_PERRY_8E",
+        0.004,
+        "published values at 20 to 65 degC lie 0.7 % higher",
+    ),
+    Widening(
+        "64-18-6",  # formic acid
+        "density",
+        "VDI_PPDS",
+        0.003,
+        "published values at 25 degC lie 0.5 to 0.6 % higher",
+    ),
+    Widening(
         "67-66-3",  # chloroform
         "density",
         "VDI_PPDS",
