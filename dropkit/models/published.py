@@ -14,7 +14,7 @@ __all__ = ["MARKS", "Published", "blank_outside", "outside_mask"]
 # How far the formula of a model can be trusted.
 MARKS: Final[dict[str, str]] = {
     "S": "seen in the text or abstract of the source itself",
-    "S2": "seen as someone else's transcription of the source",
+    "S2": "seen as someone else's copy of the source",
     "M": "from memory, not seen",
     "M+": "from memory, and it passes an independent check that is stated beside it",
     "C": "derived or computed from a stated closed formula",

@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-import math
 from collections.abc import Iterator
 from dataclasses import asdict, dataclass
 from typing import TYPE_CHECKING, Any, Final
@@ -13,6 +12,7 @@ from dropkit import units
 from dropkit.errors import BadInput, MissingProperty, UnknownName, nearest
 from dropkit.numbers.limits import Limit
 from dropkit.properties import display
+from dropkit.properties.jsonable import from_plain, to_plain
 from dropkit.provenance import Trail
 
 if TYPE_CHECKING:
@@ -204,7 +204,7 @@ class NumbersSheet:
         return {
             "kind": "NumbersSheet",
             "subject": self.subject,
-            "rows": [{**asdict(row), "value": _plain(row.value)} for row in self.rows],
+            "rows": [{**asdict(row), "value": to_plain(row.value)} for row in self.rows],
             "missing": dict(self.missing),
             "trails": [trail.to_dict() for trail in self.trails],
             "assumptions": list(self.assumptions),
@@ -226,7 +226,7 @@ class NumbersSheet:
                 NumberRow(
                     **{
                         **row,
-                        "value": _array(row["value"]),
+                        "value": from_plain(row["value"]),
                         "limits": tuple(_limit(limit) for limit in row["limits"]),
                     }
                 )
@@ -305,17 +305,3 @@ def _sides(limit: Limit, value: Any) -> str:
 
 def _limit(data: dict[str, Any]) -> Limit:
     return Limit(**{**data, "bounds": tuple(data["bounds"]), "sides": tuple(data["sides"])})
-
-
-def _plain(value: Any) -> Any:
-    """Floats and nested lists; NaN as None, which JSON has."""
-    if isinstance(value, float):
-        return None if math.isnan(value) else value
-    return [_plain(item) for item in (value.tolist() if isinstance(value, np.ndarray) else value)]
-
-
-def _array(value: Any) -> Any:
-    """Back from `_plain`."""
-    if isinstance(value, list):
-        return np.array(value, dtype=float)
-    return math.nan if value is None else value

@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 from collections.abc import Iterable, Sequence
-from typing import TYPE_CHECKING, Any
+from typing import TYPE_CHECKING, Any, Final, TypeAlias
 
 import numpy as np
 
@@ -11,6 +11,7 @@ from dropkit.unit_table import KINDS, NOMENCLATURE, Kind
 
 if TYPE_CHECKING:
     from dropkit.properties.interface import Fluid
+    from dropkit.provenance import Trail
 
 __all__ = [
     "escape",
@@ -22,6 +23,8 @@ __all__ = [
     "text_table",
     "unit_of",
 ]
+
+Row: TypeAlias = "tuple[str, ...]"
 
 ROOM = 293.15
 
@@ -106,3 +109,31 @@ def fluid_html(fluid: Fluid, title: str) -> str:
     """A liquid or mixture as an HTML table with its cautions."""
     notes = "".join(f"<li>{escape(text)}</li>" for text in fluid.cautions)
     return html_table(_HEADER, _fluid_rows(fluid), title) + (f"<ul>{notes}</ul>" if notes else "")
+
+
+SHEET_COLUMNS: Final = (
+    "property", "value", "unit", "95 %", "method", "grade", "sources", "range"
+)  # fmt: skip
+
+
+def sheet_row(prop: str, shown: str, unit: str, trail: Trail | None, reason: str = "") -> Row:
+    """A line of a sheet of properties; without a trail, why there is no value."""
+    if trail is None:
+        short = "out of range" if "out of range" in reason else "not to be had"
+        return (prop, short, "", "", reason, "", "", "")
+    spread = "" if trail.uncertainty is None else f"+-{200 * trail.uncertainty:.2g} %"
+    keys = ", ".join(trail.sources)
+    return (prop, shown, unit, spread, trail.method, trail.grade, keys, trail.range)
+
+
+def sheet_text(title: str, rows: Iterable[Row]) -> str:
+    """A sheet of properties as plain text: the short columns only."""
+    short = [(*row[:4], row[5]) for row in rows]
+    return f"{title}\n" + text_table((*SHEET_COLUMNS[:4], "grade"), short)
+
+
+def sheet_html(title: str, rows: Iterable[Row], cautions: Iterable[str]) -> str:
+    """A sheet of properties as HTML: all columns, and the cautions below."""
+    notes = "".join(f"<li>{escape(text)}</li>" for text in cautions)
+    table = html_table(SHEET_COLUMNS, rows, title)
+    return table + (f"<ul>{notes}</ul>" if notes else "")

@@ -19,6 +19,7 @@ from dropkit.errors import (
 )
 from dropkit.properties import display, humid_air
 from dropkit.properties.gas_statements import STATEMENTS, gas_trail
+from dropkit.properties.jsonable import from_plain, to_plain
 from dropkit.provenance import Grade, Trail, worst_grade
 from dropkit.unit_table import KINDS
 from dropkit.validity import Outside, Range, settle
@@ -29,8 +30,6 @@ if TYPE_CHECKING:
 __all__ = ["Air"]
 
 DIFFUSING: Final = Range(273.15, 373.15)
-
-_HEADER: Final = ("property", "value", "unit", "95 %", "method", "grade", "sources", "range")
 
 
 class _Point(NamedTuple):
@@ -341,15 +340,15 @@ class Air:
         values = {}
         for prop in self.available():
             try:
-                values[prop] = _plain(self._si(prop))
+                values[prop] = to_plain(self._si(prop))
             except DropkitError:
                 continue
         return {
             "kind": "Air",
-            "temperature": _plain(self._point.temperature),
-            "pressure": _plain(self._point.pressure),
-            "humidity": _plain(self._humidity),
-            "water_mole_fraction": _plain(self._point.x),
+            "temperature": to_plain(self._point.temperature),
+            "pressure": to_plain(self._point.pressure),
+            "humidity": to_plain(self._humidity),
+            "water_mole_fraction": to_plain(self._point.x),
             "with_units": self._asked is not None,
             "outside": self._outside,
             "values": values,
@@ -361,7 +360,7 @@ class Air:
         if not isinstance(data, dict) or data.get("kind") != "Air":
             raise BadInput("This is no dict of an Air", allowed="what Air.to_dict() gave")
         names = ("temperature", "pressure", "water_mole_fraction", "humidity")
-        *point, humidity = (_array(data[name]) for name in names)
+        *point, humidity = (from_plain(data[name]) for name in names)
         asked = units.Asked() if data["with_units"] else None
         return cls(point, humidity, asked, data["outside"])
 
@@ -374,26 +373,17 @@ class Air:
         return value / self._scale(kind)
 
     def _rows(self) -> list[tuple[str, ...]]:
-        rows: list[tuple[str, ...]] = []
+        rows = []
         for prop in self.available():
             try:
                 value, trail = self._si(prop), self.trail(prop)
             except DropkitError as problem:
-                rows.append((prop, "", "", "", str(problem), "", "", ""))
+                rows.append(display.sheet_row(prop, "", "", None, str(problem)))
                 continue
             kind = STATEMENTS[prop].kind
-            rows.append(
-                (
-                    prop,
-                    display.number(self._shown(kind, value), 5),
-                    display.unit_of(kind, with_units=self._asked is not None),
-                    f"+-{200 * (trail.uncertainty or 0.0):.2g} %",
-                    trail.method,
-                    trail.grade,
-                    ", ".join(trail.sources),
-                    trail.range,
-                )
-            )
+            shown = display.number(self._shown(kind, value), 5)
+            unit = display.unit_of(kind, with_units=self._asked is not None)
+            rows.append(display.sheet_row(prop, shown, unit, trail))
         return rows
 
     @property
@@ -404,25 +394,7 @@ class Air:
         return f"air at {celsius} degC, {kilopascal} kPa absolute, {wet} % relative humidity"
 
     def __repr__(self) -> str:
-        short = [row[:4] + row[5:6] for row in self._rows()]
-        return f"{self._title}\n" + display.text_table((*_HEADER[:4], "grade"), short)
+        return display.sheet_text(self._title, self._rows())
 
     def _repr_html_(self) -> str:
-        notes = "".join(f"<li>{display.escape(text)}</li>" for text in self.cautions)
-        table = display.html_table(_HEADER, self._rows(), self._title)
-        return table + (f"<ul>{notes}</ul>" if notes else "")
-
-
-def _plain(value: Any) -> Any:
-    """Floats and nested lists; NaN as None, which JSON has."""
-    if isinstance(value, np.ndarray):
-        return [_plain(item) for item in value]
-    number = float(value)
-    return None if np.isnan(number) else number
-
-
-def _array(value: Any) -> Any:
-    """Back from `_plain`."""
-    if isinstance(value, list):
-        return np.array(value, dtype=float)
-    return float("nan") if value is None else value
+        return display.sheet_html(self._title, self._rows(), self.cautions)

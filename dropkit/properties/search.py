@@ -3,8 +3,8 @@
 from __future__ import annotations
 
 from collections.abc import Callable, Mapping
-from dataclasses import dataclass, field
-from typing import Any, Final
+from dataclasses import dataclass
+from typing import TYPE_CHECKING, Any, Final
 
 import numpy as np
 
@@ -15,6 +15,9 @@ from dropkit.properties.composition import Composition, check_basis, to_mass
 from dropkit.properties.curves import FloatArray
 from dropkit.properties.interface import Fluid, property_name
 from dropkit.properties.mixtures import Mixture
+
+if TYPE_CHECKING:
+    import pandas as pd
 
 __all__ = ["Found", "find"]
 
@@ -56,7 +59,6 @@ class Found:
     between: tuple[float, float]
     reaches: tuple[float, float]
     in_units: bool = False
-    assumptions: tuple[str, ...] = field(default=())
 
     @property
     def solutions(self) -> list[Any]:
@@ -101,18 +103,61 @@ class Found:
     def _repr_html_(self) -> str:
         return f"<p>{display.escape(self.message)}</p>"
 
+    @property
+    def sources(self) -> tuple[str, ...]:
+        """Keys of the sources that the property of the found fluids rests on."""
+        keys = (key for fluid in self.fluids for key in fluid.trail(self.quantity).sources)
+        return tuple(dict.fromkeys(keys))
+
+    def table(self) -> pd.DataFrame:
+        """One row per solution: what was varied, the composition by mass, the grade.
+
+        Returns
+        -------
+        pandas.DataFrame
+            Empty where there is no solution.
+        """
+        import pandas as pd
+
+        label = "temperature [K]" if self.vary == "temperature" else f"{self.vary} by {self.by}"
+        rows = []
+        for value, fluid in zip(self.values, self.fluids, strict=True):
+            row: dict[str, Any] = {label: value, "fluid": fluid.name}
+            if isinstance(fluid, Mixture):
+                row |= {f"{key} [wt%]": 100 * w for key, w in fluid.mass_fractions.items()}
+            rows.append({**row, "grade": fluid.grade(self.quantity)})
+        return pd.DataFrame(rows, columns=None if rows else [label, "fluid", "grade"])
+
     def to_dict(self) -> dict[str, Any]:
-        """A dict of plain types that survives JSON."""
+        """A dict of plain types that survives JSON; `from_dict` rebuilds the result."""
+        mixtures = [fluid for fluid in self.fluids if isinstance(fluid, Mixture)]
         return {
-            "property": self.quantity,
+            "kind": "Found",
+            "quantity": self.quantity,
             "target": self.target,
             "vary": self.vary,
             "by": self.by,
-            "solutions": list(self.values),
+            "values": list(self.values),
+            "mass_fractions": [fluid.mass_fractions for fluid in mixtures],
             "between": list(self.between),
             "reaches": list(self.reaches),
+            "in_units": self.in_units,
             "message": self.message,
         }
+
+    @classmethod
+    def from_dict(cls, data: dict[str, Any]) -> Found:
+        """Rebuild a result from `to_dict`; fluids come back where they are mixtures."""
+        if not isinstance(data, dict) or data.get("kind") != "Found":
+            raise BadInput("This is no dict of a Found", allowed="what Found.to_dict() gave")
+        fluids = tuple(
+            Mixture(Composition(tuple(parts), tuple(parts.values())), quiet=True)
+            for parts in data["mass_fractions"]
+        )
+        return cls(
+            data["quantity"], data["target"], data["vary"], data["by"], tuple(data["values"]),
+            fluids, tuple(data["between"]), tuple(data["reaches"]), data["in_units"],
+        )  # fmt: skip
 
 
 def find(

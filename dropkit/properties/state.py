@@ -11,6 +11,7 @@ from dropkit import units
 from dropkit.errors import BadInput, MissingProperty
 from dropkit.properties import display
 from dropkit.properties.interface import GRADED, PROPERTIES, Fluid, property_name
+from dropkit.properties.jsonable import from_plain, to_plain
 from dropkit.provenance import Grade, Trail, worst_grade
 from dropkit.validity import Outside
 
@@ -18,8 +19,6 @@ if TYPE_CHECKING:
     import pandas as pd
 
 __all__ = ["State"]
-
-_COLUMNS = ("property", "value", "unit", "95 %", "method", "grade", "sources", "range")
 
 
 class State:
@@ -316,12 +315,12 @@ class State:
             if trail is None:
                 reasons[prop] = reason
             else:
-                values[prop] = _plain(value)
+                values[prop] = to_plain(value)
                 trails[prop] = trail.to_dict()
         return {
             "kind": "State",
             "name": self.name,
-            "temperature": _plain(self._temperature),
+            "temperature": to_plain(self._temperature),
             "with_units": self._with_units,
             "values": values,
             "trails": trails,
@@ -335,35 +334,20 @@ class State:
         if not isinstance(data, dict) or data.get("kind") != "State":
             raise BadInput("This is no dict of a State", allowed="what State.to_dict() gave")
         state = cls(
-            None, _array(data["temperature"]), with_units=data["with_units"], name=data["name"]
+            None, from_plain(data["temperature"]), with_units=data["with_units"], name=data["name"]
         )
-        state._values = {prop: _array(value) for prop, value in data["values"].items()}
+        state._values = {prop: from_plain(value) for prop, value in data["values"].items()}
         state._trails = {prop: Trail.from_dict(entry) for prop, entry in data["trails"].items()}
         state._reasons = dict(data["reasons"])
         state._cautions = tuple(data["cautions"])
         return state
 
     def _rows(self) -> list[tuple[str, ...]]:
-        rows: list[tuple[str, ...]] = []
+        rows = []
         for prop, value, trail, reason in self._given():
-            if trail is None:
-                short = "out of range" if "out of range" in reason else "not to be had"
-                rows.append((prop, short, "", "", reason, "", "", ""))
-                continue
             shown = display.in_stock(prop, value) if self._with_units else value
-            spread = "" if trail.uncertainty is None else f"+-{200 * trail.uncertainty:.2g} %"
-            rows.append(
-                (
-                    prop,
-                    display.number(shown),
-                    display.unit_of(prop, with_units=self._with_units),
-                    spread,
-                    trail.method,
-                    trail.grade,
-                    ", ".join(trail.sources),
-                    trail.range,
-                )
-            )
+            unit = display.unit_of(prop, with_units=self._with_units)
+            rows.append(display.sheet_row(prop, display.number(shown), unit, trail, reason))
         return rows
 
     @property
@@ -373,25 +357,7 @@ class State:
         return f"{self.name} at {celsius} degC ({kelvin} K)"
 
     def __repr__(self) -> str:
-        short = [row[:4] + row[5:6] for row in self._rows()]
-        return f"{self._title}\n" + display.text_table((*_COLUMNS[:4], "grade"), short)
+        return display.sheet_text(self._title, self._rows())
 
     def _repr_html_(self) -> str:
-        notes = "".join(f"<li>{display.escape(text)}</li>" for text in self.cautions)
-        table = display.html_table(_COLUMNS, self._rows(), self._title)
-        return table + (f"<ul>{notes}</ul>" if notes else "")
-
-
-def _plain(value: Any) -> Any:
-    """Floats and nested lists; NaN as None, which JSON has."""
-    if isinstance(value, np.ndarray):
-        return [_plain(item) for item in value]
-    number = float(value)
-    return None if np.isnan(number) else number
-
-
-def _array(value: Any) -> Any:
-    """Back from `_plain`."""
-    if isinstance(value, list):
-        return np.array(value, dtype=float)
-    return float("nan") if value is None else value
+        return display.sheet_html(self._title, self._rows(), self.cautions)

@@ -2,12 +2,16 @@
 
 from __future__ import annotations
 
+import json
+import pickle
+
 import pytest
 from hypothesis import given
 from hypothesis import strategies as st
 
 import dropkit as dk
 from dropkit.errors import BadInput, ImplausibleValue, UnitError, UnknownName
+from dropkit.properties.search import Found
 
 
 @pytest.fixture
@@ -96,6 +100,21 @@ def test_slips_are_named(ink, options, error, says):
     with pytest.raises(error) as caught:
         ink.find(**options)
     assert says in str(caught.value)
+
+
+def test_a_result_travels(ink):
+    found = ink.find(viscosity="4.5 mPa*s", at="20 degC", vary="glycerol")
+    table = found.table()
+    assert len(table) == 1
+    assert table["glycerol [wt%]"].iloc[0] == pytest.approx(100 * found.solutions[0], rel=1e-12)
+    again = Found.from_dict(json.loads(json.dumps(found.to_dict())))
+    assert again.message == found.message
+    assert again.fluids[0].viscosity(293.15) == pytest.approx(4.5e-3, rel=1e-8)
+    assert pickle.loads(pickle.dumps(found)).solutions == found.solutions
+    assert set(dk.cite(found)) == set(dk.cite(again))
+    assert ink.find(viscosity="0.2 mPa*s", at="20 degC", vary="glycerol").table().empty
+    with pytest.raises(BadInput, match="to_dict"):
+        Found.from_dict({})
 
 
 @given(st.floats(0.02, 0.95), st.sampled_from(["mass", "mole", "volume"]))

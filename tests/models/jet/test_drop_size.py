@@ -1,7 +1,7 @@
 """Drops by conservation of volume, drive frequency, jet speed.
 
 Marks: [C] computed elsewhere from the closed formula; [M] the case is remembered; [S2] seen in
-someone else's transcription.
+someone else's copy.
 """
 
 from __future__ import annotations

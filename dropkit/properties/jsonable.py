@@ -1,0 +1,24 @@
+"""Numbers and arrays as plain types that JSON has, and back."""
+
+from __future__ import annotations
+
+from typing import Any
+
+import numpy as np
+
+__all__ = ["from_plain", "to_plain"]
+
+
+def to_plain(value: Any) -> Any:
+    """Floats and nested lists; NaN as None, which JSON has."""
+    if isinstance(value, np.ndarray):
+        return [to_plain(item) for item in value]
+    number = float(value)
+    return None if np.isnan(number) else number
+
+
+def from_plain(value: Any) -> Any:
+    """Back from `to_plain`: arrays of floats, and floats."""
+    if isinstance(value, list):
+        return np.array(value, dtype=float)
+    return float("nan") if value is None else value
