@@ -284,7 +284,7 @@ class Fluid:
         kelvin, asked = units.read(temperature, "temperature", "temperature")
         if hasattr(kelvin, "to_numpy"):
             kelvin = kelvin.to_numpy(dtype=float)
-        return State(self, kelvin, with_units=asked is not None, outside=outside)
+        return State(self, kelvin, asked=asked, outside=outside)
 
     def with_values(self, *, at: Any = None, plausible: bool = True, **values: Any) -> Fluid:
         """The same fluid with measured values in place of the records'.

@@ -35,8 +35,8 @@ class State:
         The liquid, mixture or user's fluid.
     temperature : float or ndarray
         Temperature [K].
-    with_units : bool
-        Whether properties come as Quantities.
+    asked : Asked, optional
+        How it was asked: None for SI, else Quantities in the registry of who asked.
     outside : {"raise", "warn", "nan", "allow"}
         The range policy.
 
@@ -53,13 +53,13 @@ class State:
         fluid: Fluid | None,
         temperature: Any,
         *,
-        with_units: bool = False,
+        asked: units.Asked | None = None,
         outside: Outside = "raise",
         name: str = "",
     ) -> None:
         self._fluid = fluid
         self._temperature = temperature
-        self._with_units = with_units
+        self._asked = asked
         self._outside = outside
         self.name = fluid.name if fluid is not None else name
         self._values: dict[str, Any] = {}
@@ -70,17 +70,17 @@ class State:
     # ------------------------------------------------ how it was asked
     def si(self) -> State:
         """The same state giving SI floats and arrays."""
-        return self._turned(False)
+        return self._turned(None)
 
     def with_units(self) -> State:
         """The same state giving Quantities."""
-        return self._turned(True)
+        return self._turned(self._asked or units.Asked())
 
-    def _turned(self, with_units: bool) -> State:
+    def _turned(self, asked: units.Asked | None) -> State:
         twin = State(
             self._fluid,
             self._temperature,
-            with_units=with_units,
+            asked=asked,
             outside=self._outside,
             name=self.name,
         )
@@ -89,7 +89,7 @@ class State:
         return twin
 
     def _give(self, kind: str, value: Any) -> Any:
-        return units.give(value, kind, units.Asked() if self._with_units else None)
+        return units.give(value, kind, self._asked)
 
     # ------------------------------------------------ values
     def _si(self, prop: str) -> Any:
@@ -291,13 +291,13 @@ class State:
                 continue
             if trail.grade == "estimated" and not estimates:
                 continue
-            shown = display.in_stock(prop, value) if self._with_units else value
+            shown = display.in_stock(prop, value) if self._asked is not None else value
             spread = trail.uncertainty
             rows.append(
                 {
                     "property": prop,
                     "value": shown,
-                    "unit": display.unit_of(prop, with_units=self._with_units),
+                    "unit": display.unit_of(prop, with_units=self._asked is not None),
                     "uncertainty": float("nan") if spread is None else spread,
                     "uncertainty_95": float("nan") if spread is None else 2.0 * spread * shown,
                     "grade": trail.grade,
@@ -321,7 +321,7 @@ class State:
             "kind": "State",
             "name": self.name,
             "temperature": to_plain(self._temperature),
-            "with_units": self._with_units,
+            "with_units": self._asked is not None,
             "values": values,
             "trails": trails,
             "reasons": reasons,
@@ -334,7 +334,10 @@ class State:
         if not isinstance(data, dict) or data.get("kind") != "State":
             raise BadInput("This is no dict of a State", allowed="what State.to_dict() gave")
         state = cls(
-            None, from_plain(data["temperature"]), with_units=data["with_units"], name=data["name"]
+            None,
+            from_plain(data["temperature"]),
+            asked=units.Asked() if data["with_units"] else None,
+            name=data["name"],
         )
         state._values = {prop: from_plain(value) for prop, value in data["values"].items()}
         state._trails = {prop: Trail.from_dict(entry) for prop, entry in data["trails"].items()}
@@ -345,8 +348,8 @@ class State:
     def _rows(self) -> list[tuple[str, ...]]:
         rows = []
         for prop, value, trail, reason in self._given():
-            shown = display.in_stock(prop, value) if self._with_units else value
-            unit = display.unit_of(prop, with_units=self._with_units)
+            shown = display.in_stock(prop, value) if self._asked is not None else value
+            unit = display.unit_of(prop, with_units=self._asked is not None)
             rows.append(display.sheet_row(prop, display.number(shown), unit, trail, reason))
         return rows
 

@@ -7,6 +7,7 @@ import pickle
 
 import numpy as np
 import pandas as pd
+import pint
 import pytest
 
 import dropkit as dk
@@ -27,6 +28,16 @@ def test_state_remembers_how_it_was_asked(ink):
     assert type(ink.at(305.15).viscosity) is float
     assert type(with_units.si().viscosity) is float
     assert str(ink.at(305.15).with_units().surface_tension.units) == "millinewton / meter"
+
+
+def test_results_live_in_the_registry_of_the_quantity_that_asked(ink):
+    mine = pint.UnitRegistry()
+    state = ink.at(mine.Quantity(32.0, "degC"))
+    assert (state.viscosity + mine.Quantity(1.0, "mPa*s")).magnitude > 1.0
+    back = pickle.loads(pickle.dumps(state))  # a registry does not travel
+    assert back.viscosity.magnitude == state.viscosity.magnitude
+    assert len(ink.viscosity(["20 degC", "30 degC"]).magnitude) == 2
+    assert ink.viscosity((np.array([20.0, 30.0]), "degC")).shape == (2,)
 
 
 def test_values_are_frozen(ink):
