@@ -130,8 +130,10 @@ class Fluid:
     def _look(self, prop: str, temperature: Any, outside: Outside) -> Any:
         if type(temperature) is float and outside == "raise":
             fast = self._fast.get(prop)
-            if fast is not None and fast.low <= temperature <= fast.high:
-                return fast.value(temperature)
+            if fast is not None:
+                low, high, value = fast
+                if low <= temperature <= high:
+                    return value(temperature)
         check_outside(outside)
         kelvin, asked = units.read(temperature, "temperature", "temperature")
         fast = self._fast.get(prop)
@@ -162,6 +164,10 @@ class Fluid:
             values = self._evaluate(prop, temperature.to_numpy(dtype=float), outside)
             return type(temperature)(values, index=temperature.index, name=prop)
         limits = self._range(prop)
+        if isinstance(temperature, np.ndarray) and self._composition_is_settled():
+            good = self._all_inside(prop, temperature, limits)
+            if good is not None:
+                return good
         lost: Any = False
         if not limits.covers(temperature):
             lowest = np.fmin.reduce(np.ravel(temperature), initial=np.inf)
@@ -171,6 +177,24 @@ class Fluid:
         if not isinstance(temperature, np.ndarray) and self._shape() == ():
             return self._one(prop, temperature, limits, lost or unfit)
         return self._many(prop, temperature, limits, lost, unfit)
+
+    def _composition_is_settled(self) -> bool:
+        """Whether only the temperature can be out of range."""
+        return True
+
+    def _all_inside(self, prop: str, temperature: FloatArray, limits: Range) -> Any:
+        """Values where all temperatures are in range, else None; checks ride on the chunks."""
+        flat = temperature.reshape(-1)
+        out = np.empty(flat.size)
+        for start in range(0, flat.size, CHUNK):
+            part = slice(start, start + CHUNK)
+            piece, values = flat[part], out[part]
+            if not limits.covers(piece):
+                return None
+            self._fill(prop, part, piece, values)
+            if not (values.min() > 0.0 and values.max() < np.inf):
+                return None
+        return out.reshape(temperature.shape)
 
     def _one(self, prop: str, temperature: float, limits: Range, lost: Any) -> float:
         value = self._scalar(prop)

@@ -325,6 +325,9 @@ class Mixture(Fluid):
         mass = [w[part] if np.ndim(w) else w for w in self._mass]
         self._need(prop).fill(mass, temperature, out)
 
+    def _composition_is_settled(self) -> bool:
+        return self._pure is not None and self._shape() == ()
+
     def _settle_point(self, prop: str, temperature: Any, outside: str) -> Any:
         if self._pure is not None:
             return False

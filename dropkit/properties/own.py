@@ -299,6 +299,9 @@ class OwnFluid(Fluid):
             if route == "trend":
                 out *= self._trends[prop]
 
+    def _composition_is_settled(self) -> bool:
+        return self._base is None or self._base._composition_is_settled()
+
     def _settle_point(self, prop: str, temperature: Any, outside: str) -> Any:
         route = self._route(prop)
         if route == "own" or self._base is None:
