@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import importlib
+import sys
 from typing import TYPE_CHECKING, Any
 
 from dropkit.version import VERSION
@@ -10,7 +11,7 @@ from dropkit.version import VERSION
 __version__ = VERSION
 
 if TYPE_CHECKING:
-    from dropkit import design, errors, models, numbers, plots
+    from dropkit import errors, models, numbers, plots
     from dropkit.properties.catalogue import liquids
     from dropkit.properties.comparison import compare
     from dropkit.properties.frames import grid, lookup
@@ -31,7 +32,6 @@ _HOMES: dict[str, str | None] = {
     "liquids": "dropkit.properties.catalogue",
     "lookup": "dropkit.properties.frames",
     "mixture": "dropkit.properties.mixtures",
-    "design": None,
     "errors": None,
     "models": None,
     "numbers": None,
@@ -42,7 +42,6 @@ __all__ = [
     "air",
     "cite",
     "compare",
-    "design",
     "errors",
     "fluid",
     "grid",
@@ -58,7 +57,9 @@ __all__ = [
 
 def __getattr__(name: str) -> Any:
     if name not in _HOMES:
-        raise AttributeError(f"module 'dropkit' has no attribute {name!r}")
+        # With name and obj Python itself suggests the nearest.
+        module = sys.modules[__name__]
+        raise AttributeError(f"module 'dropkit' has no attribute {name!r}", name=name, obj=module)
     home = _HOMES[name]
     if home is None:
         return importlib.import_module(f"dropkit.{name}")

@@ -79,18 +79,17 @@ class DropkitError(Exception):
         self.hint = hint
 
     def __str__(self) -> str:
-        parts = [self.what.rstrip(".")]
+        parts = [self.what]
         if self.allowed:
-            parts.append(f"Allowed: {self.allowed.rstrip('.')}")
+            parts.append(f"Allowed: {self.allowed}")
         if self.choices:
             quoted = [f"'{choice}'" for choice in self.choices]
             if len(quoted) > 1:
                 quoted[-2:] = [f"{quoted[-2]} or {quoted[-1]}"]
             parts.append(f"Did you mean {', '.join(quoted)}?")
         if self.hint:
-            parts.append(self.hint.rstrip("."))
-        text = ". ".join(parts)
-        return text if text.endswith("?") else text + "."
+            parts.append(self.hint)
+        return " ".join(part if part.endswith((".", "?")) else f"{part}." for part in parts)
 
     def __reduce__(self) -> tuple[object, ...]:
         # Keyword-only fields do not survive the default pickling of exceptions.

@@ -185,8 +185,8 @@ def cite(*results: Any) -> str:
     Parameters
     ----------
     *results
-        Liquids, mixtures, states, gases, tables of results: anything with ``sources``;
-        also source keys as strings.
+        Liquids, mixtures, states, gases, sheets of numbers, results of searches: anything
+        with ``sources``; also source keys as strings.
 
     Returns
     -------

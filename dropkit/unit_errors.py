@@ -8,7 +8,16 @@ from __future__ import annotations
 from typing import Any, Final, NoReturn
 
 from dropkit.errors import BadInput, UnitError
-from dropkit.unit_table import KINDS, LENGTH, NONE, STANDARD_ATMOSPHERE, VISCOSITY, Dimension, Kind
+from dropkit.unit_table import (
+    KINDS,
+    LENGTH,
+    NONE,
+    STANDARD_ATMOSPHERE,
+    TEMPERATURE,
+    VISCOSITY,
+    Dimension,
+    Kind,
+)
 
 __all__ = ["bad_form", "mark_error", "mismatch", "named", "needs", "shown"]
 
@@ -27,6 +36,9 @@ def needs(kind: Kind) -> str:
     return (
         f"{kind.words} in {units}, such as '{25 if kind.name == 'temperature' else 1} {kind.stock}'"
     )
+
+
+_DEGREES: Final = ("deg", "°", "degree", "degrees")
 
 
 def mismatch(unit: str, dimension: Dimension, kind: Kind) -> UnitError:
@@ -50,6 +62,10 @@ def mismatch(unit: str, dimension: Dimension, kind: Kind) -> UnitError:
         hint = "Divide it by the molar mass"
     elif kind.dimension == LENGTH and "resolution" in names:
         hint = "Dots per length give a pitch: 600 dpi is 42.33 um"
+    elif kind.dimension == TEMPERATURE and unit in _DEGREES:
+        what = "an angle"
+        cure = "'degC' or 'degF'" if kind.name == "temperature" else "'K'"
+        hint = f"A degree alone names no scale: write {cure}"
     elif dimension == NONE and kind.si:
         hint = f"Write '1 {kind.stock}', or a bare number in {kind.si}"
     return UnitError(f"{unit!r} measures {what}", allowed=needs(kind), hint=hint)

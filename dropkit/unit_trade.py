@@ -124,6 +124,7 @@ SINGLE: Final[dict[str, tuple[Unit, str]]] = {
     "Å": (Unit(Fraction(1, 10**10), LENGTH), "angstrom"),
     "angstrom": (Unit(Fraction(1, 10**10), LENGTH), "angstrom"),
     "cc": (Unit(Fraction(1, 10**6), VOLUME), ""),
+    "cp": (Unit(_MILLI, VISCOSITY), "centipoise"),  # pint has a cup here
     "cps": (Unit(_MILLI, VISCOSITY), "centipoise"),
     "cPs": (Unit(_MILLI, VISCOSITY), "centipoise"),
     "dyn": (Unit(Fraction(1, 10**5), FORCE), "dyne"),
@@ -229,6 +230,10 @@ NEEDLE_GAUGES: Final[dict[int, int]] = {
 REFUSED: Final[dict[str, str]] = {
     "C": "'degC' for degrees Celsius, 'coulomb' for a charge",
     "F": "'degF' for degrees Fahrenheit, 'farad' for a capacitance",
+    # Small letters: pint has Boltzmann's constant and the speed of light here.
+    "k": "'K' for kelvin; before a unit k is 10^3",
+    "c": "'degC' for degrees Celsius; before a unit c is 1/100",
+    "f": "'degF' for degrees Fahrenheit; before a unit f is 10^-15",
     "M": "'mol/L' for a molar concentration, 'm' for metres; as a prefix M is 10^6",
     "u": "'um' for micrometres; 1 micron is 1 um",
     "oz": "'g' for a mass (1 ounce is 28.35 g), 'mL' for a volume (1 US fluid ounce is 29.57 mL)",

@@ -7,7 +7,7 @@ from dataclasses import dataclass
 from typing import TYPE_CHECKING, Any
 
 from dropkit.boundary import Boundary
-from dropkit.errors import UnknownName, nearest
+from dropkit.errors import BadInput, UnknownName, nearest
 from dropkit.models.families import family_modules, model_families
 from dropkit.unit_table import KINDS
 
@@ -86,6 +86,8 @@ def model_entries(family: str | None = None) -> tuple[ModelEntry, ...]:
     ------
     UnknownName
         For a family that there is not.
+    BadInput
+        For what is neither text nor None.
 
     Examples
     --------
@@ -93,11 +95,15 @@ def model_entries(family: str | None = None) -> tuple[ModelEntry, ...]:
     jet.jet_velocity: Mean speed of a round jet from its volume flow.
     """
     families = model_families()
+    if family is not None and not isinstance(family, str):
+        raise BadInput(
+            f"a {type(family).__name__} names no family of models", allowed=", ".join(families)
+        )
     if family is not None and family not in families:
         raise UnknownName(
             f"there is no family of models '{family}'",
             allowed=", ".join(families),
-            choices=nearest(str(family), families),
+            choices=nearest(family, families),
         )
     found = []
     for each in families if family is None else (family,):
@@ -126,6 +132,8 @@ def published_models(family: str | None = None) -> pd.DataFrame:
     ------
     UnknownName
         For a family that there is not.
+    BadInput
+        For what is neither text nor None.
 
     Examples
     --------

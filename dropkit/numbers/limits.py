@@ -10,7 +10,7 @@ from bisect import bisect_right
 from dataclasses import dataclass
 from typing import Final, Literal, TypeAlias
 
-from dropkit.errors import UnknownName, nearest
+from dropkit.errors import BadInput, UnknownName, nearest
 
 __all__ = ["LIMITS", "Limit", "limits_of"]
 
@@ -279,6 +279,8 @@ def limits_of(number: str) -> tuple[Limit, ...]:
     ------
     UnknownName
         For a name that is no number.
+    BadInput
+        For what is no text.
 
     Examples
     --------
@@ -287,6 +289,10 @@ def limits_of(number: str) -> tuple[Limit, ...]:
     50 for drops on a flat dry surface (Derby2010, memory)
     57.7 for drops on a dry surface, NORMAL speed (Mundo1995, second hand)
     """
+    if not isinstance(number, str):
+        raise BadInput(
+            f"a {type(number).__name__} names no number", allowed="a name, such as 'z_number'"
+        )
     found = tuple(limit for limit in LIMITS if limit.number == number)
     if not found:
         # Imported here: the catalogue imports this module.
@@ -296,7 +302,7 @@ def limits_of(number: str) -> tuple[Limit, ...]:
         if number not in names:
             raise UnknownName(
                 f"no number is called {number!r}",
-                choices=nearest(str(number), names),
+                choices=nearest(number, names),
                 hint="dropkit.numbers.overview() lists them all",
             )
     return found

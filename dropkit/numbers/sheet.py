@@ -6,10 +6,19 @@ from collections.abc import Callable
 from typing import Any, Final
 
 from dropkit import units
-from dropkit.errors import BadInput, MissingProperty, OutOfRange, UnknownName, Unphysical, nearest
+from dropkit.errors import (
+    BadInput,
+    DropkitError,
+    MissingProperty,
+    OutOfRange,
+    UnknownName,
+    Unphysical,
+    nearest,
+)
 from dropkit.numbers.catalogue import Entry, entries
 from dropkit.numbers.sheet_rows import NumberRow, NumbersSheet
 from dropkit.provenance import Trail
+from dropkit.unit_errors import shown
 
 __all__ = ["numbers_sheet"]
 
@@ -93,14 +102,17 @@ def numbers_sheet(
     UnknownName
         For a name in `more` that no number takes.
     BadInput
-        For input that cannot be read, or a property of the liquid given beside it.
+        For input that cannot be read, a state or gas that is only a name, or a property of the
+        liquid given beside it.
     OutOfRange
         If density, viscosity or surface tension are asked for outside their range.
 
     Notes
     -----
     ``radius`` is half of `length`. A property that the liquid lacks, or another one outside its
-    range, leaves the numbers that need it out; ``sheet.missing`` names them.
+    range, leaves the numbers that need it out; ``sheet.missing`` names them. If anything carries
+    a unit, the sheet answers with units, in the registry of the first Quantity: of the arguments
+    in their order, else of the properties.
 
     Examples
     --------
@@ -119,10 +131,7 @@ def numbers_sheet(
         "gravity": gravity,
         **more,
     }
-    known = _Known(state, gas, options)
-    known.read("length", length)
-    if velocity is not None:
-        known.read("velocity", velocity, domain=">= 0")
+    known = _Known(state, gas, length, velocity, options)
     rows: list[NumberRow] = []
     missing: dict[str, str] = {}
     for entry in entries():
@@ -138,7 +147,7 @@ def numbers_sheet(
         tuple(known.assumptions),
         tuple(getattr(state, "cautions", ())),
         known.versions(),
-        known.with_units,
+        known.asked,
     )
 
 
@@ -182,11 +191,16 @@ def _form(
 class _Known:
     """What is known: given, of the liquid, of the gas, or derived; in SI."""
 
-    def __init__(self, state: Any, gas: Any, options: dict[str, Any]) -> None:
+    def __init__(
+        self, state: Any, gas: Any, length: Any, velocity: Any, options: dict[str, Any]
+    ) -> None:
+        _check_holder("state", state, 'dk.liquid("water").at("20 degC")')
+        if gas is not None:
+            _check_holder("gas", gas, 'dk.air("25 degC")')
         self._state, self._gas = state, gas
         self._given: dict[str, Any] = {}
         self._fluid: dict[tuple[str, str], Any] = {}
-        self.with_units = False
+        self.asked: units.Asked | None = None
         self.trails: dict[tuple[str, str], Trail] = {}
         self.assumptions: dict[str, None] = dict.fromkeys(
             ("one diameter for nozzle, jet and drop: the length given; the radius is half of it",)
@@ -194,6 +208,9 @@ class _Known:
         self._kinds = {
             word: kind for entry in entries() for word, kind in entry.function.kinds.items()
         }
+        self.read("length", length)
+        if velocity is not None:
+            self.read("velocity", velocity, domain=">= 0")
         for word, value in options.items():
             if word in _LIQUID:
                 raise BadInput(
@@ -214,12 +231,17 @@ class _Known:
         """Take up a value that was given."""
         si, asked = units.read(value, self._kinds[word], word, **options)
         si = si.to_numpy() if hasattr(si, "to_numpy") else si  # a Series would bring its index
-        self.with_units = self.with_units or asked is not None
+        self._note(asked)
         self._given[word] = si
+
+    def _note(self, asked: units.Asked | None) -> None:
+        """Keep how the first argument with a unit was asked, and the first registry."""
+        if asked is not None and (self.asked is None or self.asked.registry is None):
+            self.asked = asked
 
     def versions(self) -> dict[str, str]:
         """Versions of dropkit and of what the properties rest on."""
-        from dropkit.properties.pure import versions
+        from dropkit.properties.trails import versions
 
         found = versions()
         for trail in self.trails.values():
@@ -272,9 +294,23 @@ class _Known:
                 raise
         if value is not None:
             value, asked = units.read(value, self._kinds[word], word)
-            self.with_units = self.with_units or asked is not None
+            self._note(asked)
             trail = getattr(holder, "trail", None)
             if callable(trail):
                 self.trails[fluid, name] = trail(name)
         self._fluid[fluid, name] = value
         return value
+
+
+def _check_holder(word: str, holder: Any, example: str) -> None:
+    """Refuse what holds no properties, such as a name: it would be passed over in silence."""
+    try:
+        if hasattr(holder, "density"):
+            return
+    except DropkitError:
+        return  # it has the property, if no value here
+    raise BadInput(
+        f"{word} = {shown(holder)} has no density",
+        allowed="an object with density, viscosity and so on",
+        hint=f"Pass {example}",
+    )

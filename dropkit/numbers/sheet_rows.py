@@ -94,8 +94,8 @@ class NumbersSheet:
         What was taken for granted, and what to know.
     versions : dict of str to str
         Versions of dropkit and its data.
-    with_units : bool
-        Whether values come as Quantities where they have a unit.
+    asked : Asked, optional
+        How it was asked: None for SI, else Quantities in the registry of who asked.
 
     Examples
     --------
@@ -116,7 +116,7 @@ class NumbersSheet:
         assumptions: tuple[str, ...] = (),
         cautions: tuple[str, ...] = (),
         versions: dict[str, str] | None = None,
-        with_units: bool = False,
+        asked: units.Asked | None = None,
     ) -> None:
         self.subject = subject
         self.rows = rows
@@ -125,13 +125,13 @@ class NumbersSheet:
         self.assumptions = assumptions
         self.cautions = cautions
         self.versions = dict(versions or {})
-        self._with_units = with_units
+        self._asked = asked
 
     # ------------------------------------------------ values
     def __getitem__(self, key: str) -> Any:
         for row in self.rows:
             if row.key == key:
-                return units.give(row.value, row.kind, units.Asked() if self._with_units else None)
+                return units.give(row.value, row.kind, self._asked)
         if key in self.missing:
             raise MissingProperty(f"{key} could not be formed: {self.missing[key]}")
         known = [row.key for row in self.rows]
@@ -148,13 +148,13 @@ class NumbersSheet:
 
     def si(self) -> NumbersSheet:
         """The same sheet giving SI floats and arrays."""
-        return self._turned(False)
+        return self._turned(None)
 
     def with_units(self) -> NumbersSheet:
         """The same sheet giving Quantities for lengths, times and speeds."""
-        return self._turned(True)
+        return self._turned(self._asked or units.Asked())
 
-    def _turned(self, with_units: bool) -> NumbersSheet:
+    def _turned(self, asked: units.Asked | None) -> NumbersSheet:
         return NumbersSheet(
             self.subject,
             self.rows,
@@ -163,7 +163,7 @@ class NumbersSheet:
             self.assumptions,
             self.cautions,
             self.versions,
-            with_units,
+            asked,
         )
 
     @property
@@ -210,7 +210,7 @@ class NumbersSheet:
             "assumptions": list(self.assumptions),
             "cautions": list(self.cautions),
             "versions": dict(self.versions),
-            "with_units": self._with_units,
+            "with_units": self._asked is not None,
         }
 
     @classmethod
@@ -237,14 +237,14 @@ class NumbersSheet:
             tuple(data["assumptions"]),
             tuple(data["cautions"]),
             data["versions"],
-            data["with_units"],
+            units.Asked() if data["with_units"] else None,
         )
 
     def _shown(self, row: NumberRow) -> Any:
-        return display.in_stock(row.kind, row.value) if self._with_units else row.value
+        return row.value if self._asked is None else display.in_stock(row.kind, row.value)
 
     def _unit(self, row: NumberRow) -> str:
-        return display.unit_of(row.kind, with_units=self._with_units)
+        return display.unit_of(row.kind, with_units=self._asked is not None)
 
     def _cells(self) -> list[tuple[str, ...]]:
         return [

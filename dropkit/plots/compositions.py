@@ -12,9 +12,9 @@ from dropkit.plots.axes import axes_or_new, label, markers
 from dropkit.properties import display
 from dropkit.properties.catalogue import resolve
 from dropkit.properties.composition import Composition, check_basis, from_mass, to_mass
-from dropkit.properties.interface import property_name
 from dropkit.properties.mixtures import Mixture
 from dropkit.properties.points import pair_points
+from dropkit.properties.property_names import property_name
 
 if TYPE_CHECKING:
     from matplotlib.axes import Axes

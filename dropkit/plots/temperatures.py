@@ -10,8 +10,9 @@ from dropkit import units
 from dropkit.errors import BadInput
 from dropkit.plots.axes import axes_or_new, label, markers
 from dropkit.properties import display
-from dropkit.properties.interface import Fluid, property_name
+from dropkit.properties.interface import Fluid
 from dropkit.properties.points import pure_points
+from dropkit.properties.property_names import property_name
 from dropkit.properties.pure import Liquid, liquid
 
 if TYPE_CHECKING:

@@ -10,7 +10,8 @@ import numpy as np
 from dropkit import units
 from dropkit.errors import BadInput, MissingProperty
 from dropkit.properties import display
-from dropkit.properties.interface import PROPERTIES, Fluid, property_name
+from dropkit.properties.interface import Fluid
+from dropkit.properties.property_names import PROPERTIES, property_names
 from dropkit.properties.pure import liquid
 from dropkit.validity import Outside, check_outside
 
@@ -43,7 +44,8 @@ def compare(
     -------
     pandas.DataFrame
         One row per property, with its unit; for each fluid its value, its 95 %
-        uncertainty and its grade. What a fluid lacks is NaN with grade "missing".
+        uncertainty and its grade. What a fluid lacks is NaN with grade
+        "missing", what lies outside a range NaN with "out of range".
 
     Raises
     ------
@@ -65,14 +67,15 @@ def compare(
     if not fluids:
         raise BadInput("compare has nothing to compare", allowed="names of liquids, or fluids")
     items = [item if isinstance(item, Fluid) else liquid(item) for item in fluids]
-    kelvin, asked = units.read(at, "temperature", "at")
-    if not isinstance(kelvin, float) or any(item._shape() != () for item in items):
-        raise BadInput("compare takes one temperature and one composition of each fluid")
+    kelvin = units.single(at, "temperature", "at", plausible=True)
+    asked = units.read(at, "temperature", "at")[1]
+    if any(item._shape() != () for item in items):
+        raise BadInput("compare takes one composition of each fluid")
     if properties is None:
         held = {prop for item in items for prop in item.available()}
         chosen = [prop for prop in PROPERTIES if prop in held]
     else:
-        chosen = [property_name(prop) for prop in properties]
+        chosen = property_names(properties)
     with_units = asked is not None
     columns: dict[tuple[str, str], list[Any]] = {}
     for number, item in enumerate(items):
@@ -86,12 +89,13 @@ def compare(
             try:
                 value = item._evaluate(prop, kelvin, outside)
                 trail = item._trail(prop, kelvin)
+                item._warn_if_recalled(prop)
             except MissingProperty:
                 value, spread, grade = np.nan, np.nan, "missing"
             else:
                 value = display.in_stock(prop, value) if with_units else value
                 spread = np.nan if trail.uncertainty is None else 2.0 * trail.uncertainty * value
-                grade = trail.grade
+                grade = trail.grade if value == value else "out of range"
             columns[label, "value"].append(value)
             columns[label, "95 %"].append(spread)
             columns[label, "grade"].append(grade)

@@ -173,7 +173,7 @@ def read_composition(
     kind = kinds.pop() if kinds else "fraction"
     basis, from_unit = _basis(kind, by)
     assumptions: list[str] = []
-    kelvin = units.single(measured_at, "temperature", "measured_at")
+    kelvin = units.single(measured_at, "temperature", "measured_at", plausible=True)
     if basis == "volume":
         assumptions.append(f"volumes before mixing, measured at {kelvin - 273.15:g} degC")
     if from_unit and rest:
@@ -192,8 +192,10 @@ def read_composition(
     mass = tuple(fractions) if done else to_mass(names, fractions, basis, kelvin)
     shape = np.broadcast_shapes(*(np.shape(value) for value in mass))
     if shape:
-        # A copy of what the user gave: it may change later.
+        # A copy of what the user gave, and nobody else writes into it either.
         mass = tuple(np.array(np.broadcast_to(value, shape), dtype=float) for value in mass)
+        for value in mass:
+            value.flags.writeable = False
     else:
         mass = tuple(float(value) for value in mass)
     return Composition(tuple(names), mass, tuple(assumptions), rest)
@@ -225,6 +227,12 @@ def _read_amount(key: str, value: Any) -> tuple[Any, str]:
         except UnitError:
             continue
         return _plain(number), basis
+    if key != "sucrose" and "bx" in str(value).casefold():
+        raise CompositionError(
+            f"{value!r} of {key}: degrees Brix are per cent of sucrose",
+            hint="A refractometer's reading of something else is not its fraction; "
+            "find(refractive_index=...) turns it into one",
+        )
     fits = {}
     for basis in BASES:
         try:
@@ -314,7 +322,7 @@ def _complete(names: Sequence[str], values: Sequence[Any], rest: str, normalise:
                 hint=percent,
             )
         share = 1.0 - total
-        if share.min() < 0.0:
+        if share.size and share.min() < 0.0:
             share = np.maximum(share, 0.0)
         remainder: Any = share if share.ndim else float(share)
         return [remainder if value is None else value for value in values]

@@ -91,11 +91,19 @@ def _fluid_rows(fluid: Fluid) -> list[tuple[str, ...]]:
     rows: list[tuple[str, ...]] = []
     for prop in fluid.available():
         limits = fluid.range(prop)
-        inside = limits.low <= ROOM <= limits.high
-        value = fluid._evaluate(prop, ROOM, "nan") if inside else None
+        # At room temperature; a narrow range elsewhere in its middle, and told so.
+        kelvin = ROOM
+        if not limits.covers(ROOM) and limits.high - limits.low < 10.0:
+            kelvin = 0.5 * (limits.low + limits.high)
+        inside = limits.covers(kelvin)
+        value = fluid._evaluate(prop, kelvin, "nan") if inside else None
         shown = "" if value is None else number(in_stock(prop, value))
+        if inside and kelvin != ROOM:
+            shown += f" at {kelvin - 273.15:.4g} degC"
         span = f"{limits.low - 273.15:.4g} to {limits.high - 273.15:.4g} degC"
-        grade = fluid._trail(prop, ROOM if inside else None).grade
+        if limits.high == float("inf"):
+            span = "any temperature"
+        grade = fluid._trail(prop, kelvin if inside else None).grade
         rows.append((prop, shown, unit_of(prop), grade, span))
     return rows
 
@@ -121,15 +129,22 @@ def sheet_row(prop: str, shown: str, unit: str, trail: Trail | None, reason: str
     if trail is None:
         short = "out of range" if "out of range" in reason else "not to be had"
         return (prop, short, "", "", reason, "", "", "")
-    spread = "" if trail.uncertainty is None else f"+-{200 * trail.uncertainty:.2g} %"
+    spread = "" if trail.uncertainty is None else band(trail.uncertainty)
     keys = ", ".join(trail.sources)
     return (prop, shown, unit, spread, trail.method, trail.grade, keys, trail.range)
 
 
-def sheet_text(title: str, rows: Iterable[Row]) -> str:
-    """A sheet of properties as plain text: the short columns only."""
+def band(uncertainty: float) -> str:
+    """The 95 % band of a relative standard uncertainty; beyond a half, as a factor."""
+    wide = 2.0 * uncertainty
+    return f"+-{100 * wide:.2g} %" if wide <= 0.5 else f"factor {1.0 + wide:.2g}"
+
+
+def sheet_text(title: str, rows: Iterable[Row], cautions: Iterable[str]) -> str:
+    """A sheet of properties as plain text: the short columns, and the cautions below."""
     short = [(*row[:4], row[5]) for row in rows]
-    return f"{title}\n" + text_table((*SHEET_COLUMNS[:4], "grade"), short)
+    table = text_table((*SHEET_COLUMNS[:4], "grade"), short)
+    return "\n".join([title, table, *(f"caution: {text}" for text in cautions)])
 
 
 def sheet_html(title: str, rows: Iterable[Row], cautions: Iterable[str]) -> str:

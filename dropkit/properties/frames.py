@@ -4,7 +4,6 @@ from __future__ import annotations
 
 import re
 from collections.abc import Iterable, Mapping, Sequence
-from itertools import product
 from typing import TYPE_CHECKING, Any, Final
 
 import numpy as np
@@ -28,8 +27,8 @@ from dropkit.properties.composition import (
     to_mass,
 )
 from dropkit.properties.curves import FloatArray
-from dropkit.properties.interface import GRADED, property_name
 from dropkit.properties.mixtures import Mixture
+from dropkit.properties.property_names import GRADED, KELVIN_HINT, property_names
 from dropkit.provenance import GRADES
 from dropkit.validity import Outside, check_outside
 
@@ -99,55 +98,73 @@ def lookup(
     check_outside(outside)
     if not isinstance(frame, pd.DataFrame):
         raise BadInput(f"lookup takes a DataFrame, not {type(frame).__name__}")
-    wanted = [property_name(prop) for prop in properties]
+    wanted = property_names(properties)
+    doubled = frame.columns[frame.columns.duplicated()]
+    if len(doubled):
+        raise BadInput(f"The frame has two columns {doubled[0]!r}", allowed="one of each name")
     table = _Table(frame, by, rest)
+    headers = {
+        prop: f"{prop} [{display.unit_of(prop, with_units=table.with_units)}]" for prop in wanted
+    }
+    for header in (*headers.values(), "grade", "reason"):
+        if header in frame.columns:
+            raise BadInput(
+                f"The frame has a column {header!r} already, where the result would go",
+                hint="Rename it: what you measured is not overwritten",
+            )
     size = len(frame)
     values = {prop: np.full(size, np.nan) for prop in wanted}
     grades = np.full(size, "", dtype=object)
-    reasons = table.reasons
     for rows, fluid in table.groups():
-        _fill_group(rows, fluid, table.temperature, wanted, outside, values, grades, reasons)
+        _fill_group(rows, fluid, table, wanted, outside, values, grades)
     result = frame.copy()
     for prop in wanted:
         shown = display.in_stock(prop, values[prop]) if table.with_units else values[prop]
-        unit = display.unit_of(prop, with_units=table.with_units)
-        result[f"{prop} [{unit}]"] = shown
+        result[headers[prop]] = shown
     result["grade"] = grades
-    result["reason"] = reasons
+    result["reason"] = table.reasons
     return result
 
 
 def _fill_group(
     rows: FloatArray,
     fluid: Mixture,
-    temperature: FloatArray,
+    table: _Table,
     wanted: Sequence[str],
     outside: Outside,
     values: Mapping[str, FloatArray],
     grades: Any,
-    reasons: list[str],
 ) -> None:
-    kelvin = temperature[rows]
-    codes = np.zeros(rows.size, dtype=int)
+    kelvin, reasons, with_units = table.temperature[rows], table.reasons, table.with_units
+    codes = np.full(rows.size, -1)
     for prop in wanted:
         try:
             got = np.asarray(fluid._evaluate(prop, kelvin, outside))
             limits = fluid._range(prop)
         except MissingProperty as problem:
-            for row in rows:
-                reasons[row] = _join(reasons[row], str(problem))
+            _tell(reasons, rows, str(problem))
             continue
+        fluid._warn_if_recalled(prop)
         values[prop][rows] = got
-        codes = np.maximum(codes, fluid.grade_codes(prop, kelvin))
-        for row in rows[np.isnan(got)]:
-            inside = limits.low <= temperature[row] <= limits.high
-            why = "composition out of range" if inside else f"temperature outside {limits}"
-            reasons[row] = _join(reasons[row], f"{prop}: {why}")
-    grades[rows] = np.array(GRADES, dtype=object)[codes]
+        lost = np.isnan(got)
+        codes = np.maximum(codes, np.where(lost, -1, fluid.grade_codes(prop, kelvin)))
+        beyond = ~lost & ~np.asarray(limits.holds(kelvin))
+        _tell(reasons, rows[beyond], f"{prop}: extrapolated, outside {limits}")
+        if lost.any():
+            inside = np.asarray(limits.holds(kelvin))
+            _tell(reasons, rows[lost & inside], f"{prop}: composition out of range")
+            cold = lost & ~inside & (kelvin < 150.0) & (not with_units)
+            _tell(reasons, rows[lost & ~inside & ~cold], f"{prop}: temperature outside {limits}")
+            _tell(reasons, rows[cold], f"{prop}: temperature outside {limits}; {KELVIN_HINT}")
+    # A grade belongs to what was given; a row without a value has none.
+    grades[rows] = np.array([*GRADES, ""], dtype=object)[codes]
 
 
-def _join(before: str, more: str) -> str:
-    return f"{before}; {more}" if before else more
+def _tell(reasons: Any, rows: Any, text: str) -> None:
+    """Add a reason to some rows of an object array."""
+    if len(rows):
+        before = reasons[rows]
+        reasons[rows] = np.where(before == "", text, before + "; " + text)
 
 
 class _Table:
@@ -157,7 +174,7 @@ class _Table:
         if by is not None:
             check_basis(by)
         self.size = len(frame)
-        self.reasons = [""] * self.size
+        self.reasons = np.full(self.size, "", dtype=object)
         self.with_units = False
         self.temperature = np.full(self.size, np.nan)
         self.keys: list[str] = []
@@ -194,8 +211,8 @@ class _Table:
             raise BadInput("The frame has a column 'liquid' and columns of components")
         if columns:
             self._read_components(columns, by, rest)
-        for row in np.flatnonzero(np.isnan(self.temperature)):
-            self.reasons[row] = _join(self.reasons[row], "temperature is missing")
+        missing = np.isnan(self.temperature) & (self.reasons == "")
+        _tell(self.reasons, np.flatnonzero(missing), "temperature is missing")
 
     def _read_temperature(self, column: pd.Series[Any], unit: str | None) -> None:
         numbers = _numbers(column, str(column.name))
@@ -206,8 +223,7 @@ class _Table:
             kelvin = np.asarray(
                 units.to_si((numbers, unit), "temperature", str(column.name), domain="any")
             )
-        for row in np.flatnonzero(kelvin <= 0.0):
-            self.reasons[row] = "temperature at or below 0 K"
+        _tell(self.reasons, np.flatnonzero(kelvin <= 0.0), "temperature at or below 0 K")
         self.temperature = np.where(kelvin > 0.0, kelvin, np.nan)
 
     def _read_components(
@@ -230,18 +246,28 @@ class _Table:
             total = np.ones(self.size)
         bad = np.zeros(self.size, dtype=bool)
         for key in keys:
-            for row in np.flatnonzero(np.isnan(shares[key])):
-                self.reasons[row] = _join(self.reasons[row], f"{key} is missing")
-            for row in np.flatnonzero(shares[key] < -1e-9):
-                self.reasons[row] = _join(self.reasons[row], f"{key} is {shares[key][row]:.4g}")
+            given = shares[key]
+            _tell(self.reasons, np.flatnonzero(np.isnan(given)), f"{key} is missing")
+            negative = np.flatnonzero(given < -1e-9)
+            for value in np.unique(given[negative]):
+                rows = negative[given[negative] == value]
+                text = f"{key} is {value:.4g}"
+                if value < -0.5:
+                    text += " (percent? divide by 100, or write [wt%] in the header)"
+                _tell(self.reasons, rows, text)
             bad |= ~(shares[key] >= -1e-9)
         off = np.zeros(self.size, dtype=bool)
         if not amounts:
             off = ~bad & (np.abs(np.asarray(total) - 1.0) > 1e-6)
-            for row in np.flatnonzero(off):
-                self.reasons[row] = _join(
-                    self.reasons[row], f"fractions add up to {np.asarray(total)[row]:.6g}, not 1"
-                )
+            rows = np.flatnonzero(off)
+            sums = np.asarray(total)[rows]
+            for value in np.unique(sums):
+                text = f"fractions add up to {value:.6g}, not 1"
+                if 50.0 < value < 150.0:
+                    text += " (percent? divide by 100, or write [wt%] in the header)"
+                elif rest is None and value < 1.0:
+                    text += " (rest= names the component that fills up)"
+                _tell(self.reasons, rows[sums == value], text)
         clean = {key: np.where(bad | off, np.nan, np.maximum(shares[key], 0.0)) for key in keys}
         self.keys = keys
         self.mass = [np.asarray(w, dtype=float) for w in to_mass(keys, list(clean.values()), basis)]
@@ -260,26 +286,29 @@ class _Table:
             chosen = [i for i in range(len(self.keys)) if int(code) >> i & 1]
             keys = tuple(self.keys[i] for i in chosen)
             if all(records.liquid_record(key).kind != "liquid" for key in keys):
-                for row in rows:
-                    self.reasons[row] = _join(self.reasons[row], "no liquid in it")
+                _tell(self.reasons, rows, "no liquid in it")
                 continue
             mass = tuple(self.mass[i][rows] for i in chosen)
-            yield rows, Mixture(Composition(keys, mass), estimates="allow", quiet=True)
+            try:
+                fluid = Mixture(Composition(keys, mass), estimates="allow", quiet=True)
+            except CompositionError as problem:
+                _tell(self.reasons, rows, str(problem))
+                continue
+            yield rows, fluid
 
     def _pure_groups(self) -> Iterable[tuple[Any, Mixture]]:
         assert self._names is not None
-        places: dict[Any, list[int]] = {}
-        for row, name in enumerate(self._names):
-            places.setdefault(name, []).append(row)
-        for name, numbers in places.items():
-            rows = np.array(numbers)
-            rows = rows[~np.isnan(self.temperature[rows])]
+        import pandas as pd
+
+        names = pd.Series([str(name) for name in self._names])
+        for name, numbers in names.groupby(names).indices.items():
+            everywhere = np.asarray(numbers)
+            rows = everywhere[~np.isnan(self.temperature[everywhere])]
             try:
-                single = read_composition({name: "rest"}, by="mass")
+                single = read_composition({str(name): "rest"}, by="mass")
                 fluid = Mixture(single, estimates="allow", quiet=True)
             except DropkitError as problem:
-                for row in numbers:
-                    self.reasons[row] = _join(self.reasons[row], str(problem))
+                _tell(self.reasons, everywhere, str(problem))
                 continue
             yield rows, fluid
 
@@ -314,11 +343,23 @@ def _numbers(column: Any, header: Any) -> FloatArray:
         raise BadInput(f"The column {header!r} holds {column.dtype}", allowed="real numbers")
     try:
         numbers = np.asarray(column, dtype=float)
-    except (TypeError, ValueError) as problem:
-        raise BadInput(f"The column {header!r} holds text", allowed="numbers") from problem
+    except (TypeError, ValueError, OverflowError) as problem:
+        where = next((place for place, x in enumerate(column) if not _is_number(x)), 0)
+        raise BadInput(
+            f"The column {header!r} holds text: row {where} is {column.iloc[where]!r}",
+            allowed="numbers with a decimal point, or NaN",
+        ) from problem
     if np.isinf(numbers).any():
         raise BadInput(f"The column {header!r} holds infinity", allowed="finite numbers or NaN")
     return numbers
+
+
+def _is_number(value: Any) -> bool:
+    try:
+        float(value)
+    except (TypeError, ValueError, OverflowError):
+        return False
+    return True
 
 
 def _on_one_basis(
@@ -408,8 +449,8 @@ def grid(
     """
     import pandas as pd
 
-    if by is None:
-        read_composition(components, by=None)  # raises BasisMissing in the same words
+    if by is None or not isinstance(components, Mapping):
+        read_composition(components, by=by)  # raises in the same words
     check_basis(by)
     kelvin, asked = units.read(temperature, "temperature", "temperature")
     axes: dict[str, list[float]] = {}
@@ -425,8 +466,8 @@ def grid(
     header = "temperature [degC]" if asked is not None else "temperature"
     flat = np.atleast_1d(np.asarray(kelvin, dtype=float)).reshape(-1)
     shown = flat - 273.15 if asked is not None else flat
-    rows = list(product(*axes.values(), shown))
-    frame = pd.DataFrame(rows, columns=[*axes, header])
+    mesh = np.meshgrid(*axes.values(), shown, indexing="ij")
+    frame = pd.DataFrame(dict(zip((*axes, header), map(np.ravel, mesh), strict=True)))
     result = lookup(frame, properties, by=by, rest=rest, outside=outside)
     fixed = [key for key in axes if key not in varied]
     return result.drop(columns=fixed).set_index([*varied, header])

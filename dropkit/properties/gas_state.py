@@ -19,7 +19,7 @@ from dropkit.errors import (
 )
 from dropkit.properties import display, humid_air
 from dropkit.properties.gas_statements import STATEMENTS, gas_trail
-from dropkit.properties.jsonable import from_plain, to_plain
+from dropkit.properties.jsonable import from_plain, frozen, to_plain
 from dropkit.provenance import Grade, Trail, worst_grade
 from dropkit.unit_table import KINDS
 from dropkit.validity import Outside, Range, settle
@@ -102,8 +102,8 @@ class Air:
         self, point: Any, humidity: Any, asked: Any, outside: Outside, index: Any = None
     ) -> None:
         for slot, value in (
-            ("_point", _Point(*point)),
-            ("_humidity", humidity),
+            ("_point", _Point(*map(frozen, point))),
+            ("_humidity", frozen(humidity)),
             ("_asked", asked),
             ("_outside", outside),
             ("_index", index),
@@ -357,7 +357,15 @@ class Air:
     @classmethod
     def from_dict(cls, data: dict[str, Any]) -> Air:
         """Rebuild an air from `to_dict`, also after a passage through JSON."""
-        if not isinstance(data, dict) or data.get("kind") != "Air":
+        needed = {
+            "temperature",
+            "pressure",
+            "water_mole_fraction",
+            "humidity",
+            "with_units",
+            "outside",
+        }
+        if not isinstance(data, dict) or data.get("kind") != "Air" or not needed <= data.keys():
             raise BadInput("This is no dict of an Air", allowed="what Air.to_dict() gave")
         names = ("temperature", "pressure", "water_mole_fraction", "humidity")
         *point, humidity = (from_plain(data[name]) for name in names)
@@ -394,7 +402,7 @@ class Air:
         return f"air at {celsius} degC, {kilopascal} kPa absolute, {wet} % relative humidity"
 
     def __repr__(self) -> str:
-        return display.sheet_text(self._title, self._rows())
+        return display.sheet_text(self._title, self._rows(), self.cautions)
 
     def _repr_html_(self) -> str:
         return display.sheet_html(self._title, self._rows(), self.cautions)

@@ -149,7 +149,7 @@ def gas_trail(prop: str, temperature: Any, pressure: Any, x: Any) -> Trail:
     Trail
         With the largest uncertainty of the elements.
     """
-    from dropkit.properties.pure import versions
+    from dropkit.properties.trails import versions
 
     said = STATEMENTS[prop]
     humid = bool(np.any(np.greater(x, 0.0)))

@@ -3,20 +3,28 @@
 from __future__ import annotations
 
 import warnings
-from collections.abc import Callable, Sequence
-from typing import TYPE_CHECKING, Any, Final, overload
+from collections.abc import Callable, Mapping, Sequence
+from dataclasses import replace
+from typing import TYPE_CHECKING, Any
 
 import numpy as np
 
 from dropkit import units
 from dropkit.errors import (
+    BadInput,
     DropkitWarning,
     MissingProperty,
     RecalledWarning,
-    UnknownName,
-    nearest,
 )
 from dropkit.properties.curves import CHUNK, Fast, FloatArray
+from dropkit.properties.property_methods import PropertyMethods
+from dropkit.properties.property_names import (
+    GRADED,
+    KELVIN_HINT,
+    QUOTIENT,
+    property_name,
+)
+from dropkit.properties.trails import quotient_trail
 from dropkit.provenance import Grade, Trail, worst_grade
 from dropkit.records import PropertyRecord
 from dropkit.validity import Outside, Range, check_outside, settle
@@ -25,45 +33,10 @@ if TYPE_CHECKING:
     from dropkit.properties.search import Found
     from dropkit.properties.state import State
 
-__all__ = ["GRADED", "KELVIN_HINT", "PROPERTIES", "Fluid", "property_name"]
-
-# Every property by its word in the interface, in the order in which tables show them.
-PROPERTIES: Final[dict[str, str]] = {
-    "density": "mass per volume",
-    "viscosity": "dynamic viscosity at low shear",
-    "kinematic_viscosity": "dynamic viscosity over density",
-    "surface_tension": "against air or its own vapour",
-    "vapour_pressure": "absolute",
-    "heat_of_vaporisation": "per mass",
-    "heat_capacity": "of the liquid at constant pressure, per mass",
-    "thermal_conductivity": "of the liquid",
-    "static_permittivity": "relative, at low frequency",
-    "speed_of_sound": "in the liquid",
-    "refractive_index": "at 589 nm",
-    "diffusivity_in_air": "of the vapour, at 101325 Pa",
-    "electrical_conductivity": "order of magnitude: traces of water and ions decide it",
-}
-# The grade of a liquid is the worst of these.
-GRADED: Final = ("density", "viscosity", "surface_tension")
-
-KELVIN_HINT: Final = (
-    "Bare temperatures are in kelvin: kelvin expected, 25 degC is 298.15; "
-    "with a unit write '25 degC'"
-)
+__all__ = ["Fluid"]
 
 
-def property_name(name: str) -> str:
-    """`name` if it is a property; else UnknownName with the nearest ones."""
-    if isinstance(name, str) and name in PROPERTIES:
-        return name
-    raise UnknownName(
-        f"No property is called {name!r}",
-        allowed=", ".join(PROPERTIES),
-        choices=nearest(str(name), PROPERTIES),
-    )
-
-
-class Fluid:
+class Fluid(PropertyMethods):
     """Base of liquids, mixtures and users' fluids.
 
     Every property is a method of temperature [K, or with a unit]: floats and arrays
@@ -87,24 +60,91 @@ class Fluid:
         """What a user should know whatever property is asked."""
         raise NotImplementedError
 
-    def _range(self, prop: str) -> Range:
+    def _record_range(self, prop: str) -> Range:
         """Stated temperature range of a property."""
         raise NotImplementedError
 
-    def _scalar(self, prop: str) -> Callable[[float], float] | None:
+    def _record_scalar(self, prop: str) -> Callable[[float], float] | None:
         """The quick evaluator for one temperature, or None where the composition is an array."""
         raise NotImplementedError
 
-    def _fill(self, prop: str, part: slice, temperature: FloatArray, out: FloatArray) -> None:
+    def _record_fill(
+        self, prop: str, part: slice, temperature: FloatArray, out: FloatArray
+    ) -> None:
         """Evaluate a flat chunk; `part` says which elements of the broadcast it covers."""
         raise NotImplementedError
 
-    def _trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
+    def _record_trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
+        """How the property is made inside its range."""
         raise NotImplementedError
 
-    def _blocks(self, prop: str) -> Sequence[PropertyRecord]:
+    def _record_blocks(self, prop: str) -> Sequence[PropertyRecord]:
         """The records that a property rests on, at whatever temperature."""
         raise NotImplementedError
+
+    def _record_settle(self, prop: str, temperature: Any, outside: str) -> Any:
+        """Apply the range policy to the composition; the mask that becomes NaN."""
+        return False
+
+    def _is_quotient(self, prop: str) -> bool:
+        """Whether a property follows from two others: kinematic viscosity, unless it is given."""
+        return prop == "kinematic_viscosity"
+
+    # ------------------------------------------------ the same, quotients included
+    def _range(self, prop: str) -> Range:
+        if not self._is_quotient(prop):
+            return self._record_range(prop)
+        first, second = (self._record_range(part) for part in QUOTIENT)
+        low, high = max(first.low, second.low), min(first.high, second.high)
+        if low > high:
+            raise MissingProperty(
+                f"{self.name}: viscosity and density hold at different temperatures",
+                hint="Give both at the same temperature, or as (temperature, value) pairs",
+            )
+        return Range(low, high)
+
+    def _scalar(self, prop: str) -> Callable[[float], float] | None:
+        if not self._is_quotient(prop):
+            return self._record_scalar(prop)
+        viscosity, density = (self._record_scalar(part) for part in QUOTIENT)
+        if viscosity is None or density is None:
+            return None
+        top, bottom = viscosity, density
+        return lambda temperature: top(temperature) / bottom(temperature)
+
+    def _fill(self, prop: str, part: slice, temperature: FloatArray, out: FloatArray) -> None:
+        if not self._is_quotient(prop):
+            self._record_fill(prop, part, temperature, out)
+            return
+        density = np.empty_like(out)
+        self._record_fill("viscosity", part, temperature, out)
+        self._record_fill("density", part, temperature, density)
+        np.divide(out, density, out=out)
+
+    def _blocks(self, prop: str) -> Sequence[PropertyRecord]:
+        parts = QUOTIENT if self._is_quotient(prop) else (prop,)
+        return [block for part in parts for block in self._record_blocks(part)]
+
+    def _settle_point(self, prop: str, temperature: Any, outside: str) -> Any:
+        parts = QUOTIENT if self._is_quotient(prop) else (prop,)
+        mask: Any = False
+        for part in parts:
+            mask = mask | self._record_settle(part, temperature, outside)
+        return mask
+
+    def _trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
+        if self._is_quotient(prop):
+            trail = quotient_trail([self._record_trail(part, temperature) for part in QUOTIENT])
+        else:
+            trail = self._record_trail(prop, temperature)
+        if temperature is None:
+            return trail
+        limits = self._range(prop)
+        outside = ~np.asarray(limits.holds(np.asarray(temperature, dtype=float)))
+        if not (outside.any() or np.any(self._settle_point(prop, temperature, "nan"))):
+            return trail
+        caution = f"extrapolated: outside its stated range, {limits}; no uncertainty is known there"
+        return replace(trail, uncertainty=None, cautions=(*trail.cautions, caution))
 
     def _shape(self) -> tuple[int, ...]:
         """Shape of the composition; () for one composition."""
@@ -121,10 +161,6 @@ class Fluid:
             allowed="it has " + ", ".join(has),
             hint=f"If you have measured it, add it: with_values({prop}=...)",
         )
-
-    def _settle_point(self, prop: str, temperature: Any, outside: str) -> Any:
-        """Apply the range policy to composition and temperature together; the mask for NaN."""
-        return False
 
     # ------------------------------------------------ evaluation
     def _look(self, prop: str, temperature: Any, outside: Outside) -> Any:
@@ -175,8 +211,12 @@ class Fluid:
             lost = settle(f"{prop} of {self.name}", temperature, limits, outside, hint=hint)
         unfit = self._settle_point(prop, temperature, outside)
         if not isinstance(temperature, np.ndarray) and self._shape() == ():
-            return self._one(prop, temperature, limits, lost or unfit)
+            return self._one(prop, temperature, limits, lost, unfit)
         return self._many(prop, temperature, limits, lost, unfit)
+
+    def _without_gaps(self, prop: str) -> bool:
+        """Whether every temperature between the ends of the range is served."""
+        return True
 
     def _composition_is_settled(self) -> bool:
         """Whether only the temperature can be out of range."""
@@ -196,12 +236,13 @@ class Fluid:
                 return None
         return out.reshape(temperature.shape)
 
-    def _one(self, prop: str, temperature: float, limits: Range, lost: Any) -> float:
+    def _one(self, prop: str, temperature: float, limits: Range, lost: Any, unfit: Any) -> float:
         value = self._scalar(prop)
         assert value is not None
-        self._fast.setdefault(prop, Fast(limits.low, limits.high, value))
+        if unfit is False and self._without_gaps(prop):
+            self._fast.setdefault(prop, Fast(limits.low, limits.high, value))
         # Written so that NaN comes out as NaN without a warning.
-        if lost or temperature != temperature:
+        if lost or unfit or temperature != temperature:
             return float("nan")
         if temperature < 0.5 * limits.low:
             return self._not_finite(prop, 1)
@@ -214,7 +255,7 @@ class Fluid:
         return result
 
     def _many(self, prop: str, temperature: Any, limits: Range, lost: Any, unfit: Any) -> Any:
-        shape = np.broadcast_shapes(np.shape(temperature), self._shape())
+        shape = self._common_shape(temperature)
         flat = np.broadcast_to(temperature, shape).reshape(-1)
         fluid = self._broadcast(shape)
         work = np.empty(flat.size)
@@ -238,6 +279,18 @@ class Fluid:
             if fresh:
                 self._not_finite(prop, fresh)
         return out
+
+    def _common_shape(self, temperature: Any) -> tuple[int, ...]:
+        """Shape of a result; BadInput where temperatures and compositions don't fit together."""
+        try:
+            return np.broadcast_shapes(np.shape(temperature), self._shape())
+        except ValueError:
+            raise BadInput(
+                f"Temperatures of shape {np.shape(temperature)} don't fit compositions of shape "
+                f"{self._shape()}",
+                allowed="shapes that broadcast",
+                hint="For every combination of the two use dk.grid()",
+            ) from None
 
     def _not_finite(self, prop: str, count: int) -> float:
         many = "1 value" if count == 1 else f"{count} values"
@@ -310,23 +363,33 @@ class Fluid:
             kelvin = kelvin.to_numpy(dtype=float)
         return State(self, kelvin, asked=asked, outside=outside)
 
-    def with_values(self, *, at: Any = None, plausible: bool = True, **values: Any) -> Fluid:
+    def with_values(
+        self,
+        *,
+        at: Any = None,
+        plausible: bool = True,
+        uncertainty: Mapping[str, Any] | None = None,
+        **values: Any,
+    ) -> Fluid:
         """The same fluid with measured values in place of the records'.
 
         Parameters
         ----------
         at : temperature, optional
-            Where the values were measured. Given, a value follows the trend of the
-            record that it replaces; left out, it is held constant. Either is listed
-            under the assumptions.
+            Where the values were measured. Given, a value of a fluid of one composition
+            follows the trend of the record that it replaces, and one that replaces nothing
+            holds within 0.5 K; left out, values are held constant. All is listed under the
+            assumptions.
         plausible : bool
             False accepts values that no ordinary liquid has.
+        uncertainty : mapping, optional
+            Relative standard uncertainty (k = 1) by property.
         **values
             Properties by name, each a number (SI) or with a unit.
         """
         from dropkit.properties.own import overlay
 
-        return overlay(self, values, at=at, plausible=plausible)
+        return overlay(self, values, at=at, plausible=plausible, uncertainty=uncertainty)
 
     def find(
         self,
@@ -364,110 +427,3 @@ class Fluid:
         from dropkit.properties.search import find
 
         return find(self, target, at=at, vary=vary, between=between, by=by, plausible=plausible)
-
-    # ------------------------------------------------ the properties
-    # One overload pair each: floats give float, anything else depends on what is asked.
-
-    @overload
-    def density(self, temperature: float, *, outside: Outside = ...) -> float: ...
-    @overload
-    def density(self, temperature: Any, *, outside: Outside = ...) -> Any: ...
-    def density(self, temperature: Any, *, outside: Outside = "raise") -> Any:
-        """Density [kg/m3] at `temperature` [K, or with a unit]."""
-        return self._look("density", temperature, outside)
-
-    @overload
-    def viscosity(self, temperature: float, *, outside: Outside = ...) -> float: ...
-    @overload
-    def viscosity(self, temperature: Any, *, outside: Outside = ...) -> Any: ...
-    def viscosity(self, temperature: Any, *, outside: Outside = "raise") -> Any:
-        """Dynamic viscosity at low shear [Pa*s] at `temperature` [K, or with a unit]."""
-        return self._look("viscosity", temperature, outside)
-
-    @overload
-    def kinematic_viscosity(self, temperature: float, *, outside: Outside = ...) -> float: ...
-    @overload
-    def kinematic_viscosity(self, temperature: Any, *, outside: Outside = ...) -> Any: ...
-    def kinematic_viscosity(self, temperature: Any, *, outside: Outside = "raise") -> Any:
-        """Kinematic viscosity: dynamic viscosity over density [m2/s] at `temperature` [K, or with a unit]."""
-        return self._look("kinematic_viscosity", temperature, outside)
-
-    @overload
-    def surface_tension(self, temperature: float, *, outside: Outside = ...) -> float: ...
-    @overload
-    def surface_tension(self, temperature: Any, *, outside: Outside = ...) -> Any: ...
-    def surface_tension(self, temperature: Any, *, outside: Outside = "raise") -> Any:
-        """Surface tension against air or its own vapour [N/m] at `temperature` [K, or with a unit]."""
-        return self._look("surface_tension", temperature, outside)
-
-    @overload
-    def vapour_pressure(self, temperature: float, *, outside: Outside = ...) -> float: ...
-    @overload
-    def vapour_pressure(self, temperature: Any, *, outside: Outside = ...) -> Any: ...
-    def vapour_pressure(self, temperature: Any, *, outside: Outside = "raise") -> Any:
-        """Vapour pressure, absolute [Pa] at `temperature` [K, or with a unit]."""
-        return self._look("vapour_pressure", temperature, outside)
-
-    @overload
-    def heat_of_vaporisation(self, temperature: float, *, outside: Outside = ...) -> float: ...
-    @overload
-    def heat_of_vaporisation(self, temperature: Any, *, outside: Outside = ...) -> Any: ...
-    def heat_of_vaporisation(self, temperature: Any, *, outside: Outside = "raise") -> Any:
-        """Heat of vaporisation per mass [J/kg] at `temperature` [K, or with a unit]."""
-        return self._look("heat_of_vaporisation", temperature, outside)
-
-    @overload
-    def heat_capacity(self, temperature: float, *, outside: Outside = ...) -> float: ...
-    @overload
-    def heat_capacity(self, temperature: Any, *, outside: Outside = ...) -> Any: ...
-    def heat_capacity(self, temperature: Any, *, outside: Outside = "raise") -> Any:
-        """Isobaric heat capacity of the liquid per mass [J/(kg*K)] at `temperature` [K, or with a unit]."""
-        return self._look("heat_capacity", temperature, outside)
-
-    @overload
-    def thermal_conductivity(self, temperature: float, *, outside: Outside = ...) -> float: ...
-    @overload
-    def thermal_conductivity(self, temperature: Any, *, outside: Outside = ...) -> Any: ...
-    def thermal_conductivity(self, temperature: Any, *, outside: Outside = "raise") -> Any:
-        """Thermal conductivity of the liquid [W/(m*K)] at `temperature` [K, or with a unit]."""
-        return self._look("thermal_conductivity", temperature, outside)
-
-    @overload
-    def static_permittivity(self, temperature: float, *, outside: Outside = ...) -> float: ...
-    @overload
-    def static_permittivity(self, temperature: Any, *, outside: Outside = ...) -> Any: ...
-    def static_permittivity(self, temperature: Any, *, outside: Outside = "raise") -> Any:
-        """Relative static permittivity [-] at `temperature` [K, or with a unit]."""
-        return self._look("static_permittivity", temperature, outside)
-
-    @overload
-    def speed_of_sound(self, temperature: float, *, outside: Outside = ...) -> float: ...
-    @overload
-    def speed_of_sound(self, temperature: Any, *, outside: Outside = ...) -> Any: ...
-    def speed_of_sound(self, temperature: Any, *, outside: Outside = "raise") -> Any:
-        """Speed of sound in the liquid [m/s] at `temperature` [K, or with a unit]."""
-        return self._look("speed_of_sound", temperature, outside)
-
-    @overload
-    def refractive_index(self, temperature: float, *, outside: Outside = ...) -> float: ...
-    @overload
-    def refractive_index(self, temperature: Any, *, outside: Outside = ...) -> Any: ...
-    def refractive_index(self, temperature: Any, *, outside: Outside = "raise") -> Any:
-        """Refractive index at 589 nm [-] at `temperature` [K, or with a unit]."""
-        return self._look("refractive_index", temperature, outside)
-
-    @overload
-    def diffusivity_in_air(self, temperature: float, *, outside: Outside = ...) -> float: ...
-    @overload
-    def diffusivity_in_air(self, temperature: Any, *, outside: Outside = ...) -> Any: ...
-    def diffusivity_in_air(self, temperature: Any, *, outside: Outside = "raise") -> Any:
-        """Diffusivity of the vapour in air at 101325 Pa [m2/s] at `temperature` [K, or with a unit]."""
-        return self._look("diffusivity_in_air", temperature, outside)
-
-    @overload
-    def electrical_conductivity(self, temperature: float, *, outside: Outside = ...) -> float: ...
-    @overload
-    def electrical_conductivity(self, temperature: Any, *, outside: Outside = ...) -> Any: ...
-    def electrical_conductivity(self, temperature: Any, *, outside: Outside = "raise") -> Any:
-        """Electrical conductivity, an order of magnitude [S/m] at `temperature` [K, or with a unit]."""
-        return self._look("electrical_conductivity", temperature, outside)

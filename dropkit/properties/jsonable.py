@@ -1,4 +1,4 @@
-"""Numbers and arrays as plain types that JSON has, and back."""
+"""Numbers and arrays that stay as they are: as plain types of JSON and back, and frozen."""
 
 from __future__ import annotations
 
@@ -6,7 +6,16 @@ from typing import Any
 
 import numpy as np
 
-__all__ = ["from_plain", "to_plain"]
+__all__ = ["from_plain", "frozen", "to_plain"]
+
+
+def frozen(value: Any) -> Any:
+    """A copy of an array that nobody can write into; anything else as it is."""
+    if not isinstance(value, np.ndarray):
+        return value
+    copy = value.copy()
+    copy.flags.writeable = False
+    return copy
 
 
 def to_plain(value: Any) -> Any:

@@ -8,9 +8,10 @@ from typing import Any, Final, Literal
 
 import numpy as np
 
-from dropkit import records
+from dropkit import records, units
 from dropkit.errors import (
     BadInput,
+    CompositionError,
     EstimateRefused,
     EstimateWarning,
     MissingProperty,
@@ -27,21 +28,19 @@ from dropkit.properties.composition import (
     read_composition,
 )
 from dropkit.properties.curves import FloatArray
-from dropkit.properties.interface import GRADED, PROPERTIES, Fluid
+from dropkit.properties.interface import Fluid
 from dropkit.properties.mixing.blends import Blend, blend
 from dropkit.properties.mixing.redlich_kister import RULES
-from dropkit.properties.pure import (
-    Liquid,
-    quotient_trail,
-    record_use,
-    relative_uncertainty,
-    versions,
-)
+from dropkit.properties.property_names import GRADED, PROPERTIES, QUOTIENT
+from dropkit.properties.pure import Liquid
+from dropkit.properties.trails import record_use, relative_uncertainty, versions
 from dropkit.provenance import GRADES, Trail, worst_grade
 from dropkit.validity import Range, settle
 
 __all__ = ["Mixture", "mixture"]
 
+# Water dissolves less than 0.1 % of these, and they of it (common practice).
+HYDROCARBONS: Final = frozenset({"alkane", "aromatic"})
 ESTIMATES: Final = ("warn", "allow", "refuse")
 
 
@@ -117,7 +116,7 @@ class Mixture(Fluid):
         quiet: bool = False,
     ) -> None:
         super().__init__()
-        if estimates not in ESTIMATES:
+        if not isinstance(estimates, str) or estimates not in ESTIMATES:
             raise BadInput(
                 f"estimates={estimates!r} is not known", allowed="'warn', 'allow' or 'refuse'"
             )
@@ -133,6 +132,20 @@ class Mixture(Fluid):
             raise NotALiquid(
                 f"{', '.join(entry.name for entry in entries)}: a mixture needs a liquid",
                 hint="Add the solvent, such as 'water': 'rest'",
+            )
+        metals = {entry.family == "metal" for entry in entries}
+        if len(metals) > 1:
+            raise CompositionError(
+                f"{', '.join(entry.name for entry in entries)}: a molten metal does not mix with "
+                "other liquids",
+                hint="Ask for each by itself",
+            )
+        wet = {"water" if entry.key == "water" else entry.family for entry in entries}
+        if "water" in wet and len(wet) > 1 and wet - {"water"} <= HYDROCARBONS:
+            raise CompositionError(
+                f"{', '.join(entry.name for entry in entries)}: water and hydrocarbons do not mix "
+                "but form two liquids",
+                hint="Ask for each by itself",
             )
         self._pure = Liquid(entries[0]) if len(entries) == 1 else None
         self.name = self._title(entries)
@@ -194,19 +207,20 @@ class Mixture(Fluid):
         """Mass fraction of each component; floats or arrays."""
         return dict(zip(self._composition.keys, self._composition.fractions, strict=True))
 
-    def fractions(self, by: str = "mass", *, measured_at: float = 293.15) -> dict[str, Any]:
+    def fractions(self, by: str = "mass", *, measured_at: Any = 293.15) -> dict[str, Any]:
         """Fraction of each component on a basis.
 
         Parameters
         ----------
         by : {"mass", "mole", "volume"}
-            ``"volume"`` means volumes before mixing at `measured_at` [K].
-        measured_at : float
-            Temperature [K] of those volumes.
+            ``"volume"`` means volumes before mixing at `measured_at`.
+        measured_at : temperature
+            Of those volumes [K, or with a unit].
         """
         check_basis(by)
         keys = self._composition.keys
-        shares = from_mass(keys, self._composition.fractions, by, measured_at)
+        kelvin = units.single(measured_at, "temperature", "measured_at", plausible=True)
+        shares = from_mass(keys, self._composition.fractions, by, kelvin)
         return dict(zip(keys, shares, strict=True))
 
     @property
@@ -276,19 +290,14 @@ class Mixture(Fluid):
             held.add("kinematic_viscosity")
         return tuple(prop for prop in PROPERTIES if prop in held)
 
-    def _blocks(self, prop: str) -> Sequence[records.PropertyRecord]:
+    def _record_blocks(self, prop: str) -> Sequence[records.PropertyRecord]:
         if self._pure is not None:
-            return self._pure._blocks(prop)
-        if prop == "kinematic_viscosity":
-            return (*self._blocks("viscosity"), *self._blocks("density"))
+            return self._pure._record_blocks(prop)
         return self._need(prop).serving(self._mass, None)
 
-    def _range(self, prop: str) -> Range:
+    def _record_range(self, prop: str) -> Range:
         if self._pure is not None:
-            return self._pure._range(prop)
-        if prop == "kinematic_viscosity":
-            density, viscosity = self._range("density"), self._range("viscosity")
-            return Range(max(density.low, viscosity.low), min(density.high, viscosity.high))
+            return self._pure._record_range(prop)
         return self._need(prop).range(self._mass)
 
     def _shape(self) -> tuple[int, ...]:
@@ -300,40 +309,34 @@ class Mixture(Fluid):
         flat = tuple(np.broadcast_to(w, shape).reshape(-1) for w in self._mass)
         return Mixture(Composition(self._keys, flat), estimates=self._estimates, quiet=True)
 
-    def _scalar(self, prop: str) -> Callable[[float], float] | None:
+    def _record_scalar(self, prop: str) -> Callable[[float], float] | None:
         if self._shape() != ():
             return None
         if self._pure is not None:
-            return self._pure._scalar(prop)
-        if prop == "kinematic_viscosity":
-            density, viscosity = self._scalar("density"), self._scalar("viscosity")
-            assert density is not None
-            assert viscosity is not None
-            return lambda temperature: viscosity(temperature) / density(temperature)
+            return self._pure._record_scalar(prop)
         return self._need(prop).scalar(self._mass)
 
-    def _fill(self, prop: str, part: slice, temperature: FloatArray, out: FloatArray) -> None:
+    def _record_fill(
+        self, prop: str, part: slice, temperature: FloatArray, out: FloatArray
+    ) -> None:
         if self._pure is not None:
-            self._pure._fill(prop, part, temperature, out)
-            return
-        if prop == "kinematic_viscosity":
-            density = np.empty_like(out)
-            self._fill("viscosity", part, temperature, out)
-            self._fill("density", part, temperature, density)
-            np.divide(out, density, out=out)
+            self._pure._record_fill(prop, part, temperature, out)
             return
         mass = [w[part] if np.ndim(w) else w for w in self._mass]
         self._need(prop).fill(mass, temperature, out)
 
+    def _without_gaps(self, prop: str) -> bool:
+        if self._pure is not None:
+            return True
+        parts = QUOTIENT if self._is_quotient(prop) else (prop,)
+        return all(self._need(part).without_gaps(self._mass) for part in parts)
+
     def _composition_is_settled(self) -> bool:
         return self._pure is not None and self._shape() == ()
 
-    def _settle_point(self, prop: str, temperature: Any, outside: str) -> Any:
+    def _record_settle(self, prop: str, temperature: Any, outside: str) -> Any:
         if self._pure is not None:
             return False
-        if prop == "kinematic_viscosity":
-            gone = self._settle_point("density", temperature, outside)
-            return gone | self._settle_point("viscosity", temperature, outside)
         rule = self._need(prop)
         subject = f"{prop} of {self.name}"
         mask: Any = False
@@ -342,7 +345,9 @@ class Mixture(Fluid):
         unserved = rule.unserved(self._mass, temperature)
         if unserved is False or outside == "allow":
             return mask
-        unserved = unserved & ~np.asarray(mask)
+        # Points beyond the outer range of temperature were told before.
+        limits = rule.range(self._mass)
+        unserved = unserved & ~np.asarray(mask) & limits.holds(np.asarray(temperature, float))
         if not np.any(unserved):
             return mask
         if outside == "nan":
@@ -364,11 +369,9 @@ class Mixture(Fluid):
         warnings.warn(what, RangeWarning, stacklevel=5)
         return mask
 
-    def _trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
+    def _record_trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
         if self._pure is not None:
-            return self._pure._trail(prop, temperature)
-        if prop == "kinematic_viscosity":
-            return quotient_trail(self, temperature)
+            return self._pure._record_trail(prop, temperature)
         rule = self._need(prop)
         used = rule.serving(self._mass, temperature)
         grades = [block.grade for block in used]
@@ -378,11 +381,15 @@ class Mixture(Fluid):
         if len(rule.solvents) > 2:
             assumptions.append("no ternary terms: each pair enters at its own ratio")
         assumptions += [
-            f"{rule.records[i].name} + {rule.records[j].name}: no measured record, no excess"
+            f"{rule.records[i].name} + {rule.records[j].name}: no measured record, no excess, one "
+            "phase taken for granted"
             for i, j in rule.unfitted
         ]
         if rule.solutes and len(rule.solvents) > 1:
-            assumptions.append("the salt acts on the mixed solvent as it does on water")
+            assumptions.append(
+                "the salt acts on the mixed solvent as it does on water; the error quoted is that "
+                "of aqueous pairs without a record"
+            )
         cautions = [text for block in used for text in block.cautions]
         if prop == "viscosity":
             cautions.append("viscosity at low shear")

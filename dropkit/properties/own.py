@@ -13,9 +13,11 @@ import numpy as np
 from dropkit import units
 from dropkit.errors import BadInput
 from dropkit.properties import display
+from dropkit.properties.cautions import STATIC_ACCUMULATOR
 from dropkit.properties.curves import FloatArray
-from dropkit.properties.interface import PROPERTIES, Fluid, property_name
-from dropkit.properties.pure import quotient_trail, versions
+from dropkit.properties.interface import Fluid
+from dropkit.properties.property_names import PROPERTIES, QUOTIENT, property_name
+from dropkit.properties.trails import grade_with, versions
 from dropkit.provenance import Trail
 from dropkit.records import PropertyRecord
 from dropkit.validity import Range
@@ -25,6 +27,8 @@ __all__ = ["OwnFluid", "fluid", "overlay"]
 # A value stated at one temperature serves this far around it.
 AROUND: Final = 0.5  # K
 # Straight lines in ln(y) over 1/T for these, in y over T for the rest.
+# Dynamic viscosity, where the kinematic one is given, is the first times the second.
+PRODUCT: Final = ("kinematic_viscosity", "density")
 _EXPONENTIAL: Final = ("viscosity", "kinematic_viscosity", "vapour_pressure")
 
 
@@ -80,8 +84,10 @@ class OwnCurve:
         nodes = 1.0 / known if curved else known
         y = np.log(self.values) if curved else np.array(self.values)
         slope = np.diff(y) / np.diff(nodes)
-        line = y[place] + slope[place] * (x - nodes[place])
-        return np.exp(line) if curved else line
+        # Far outside, where the user asked for it, a line may overflow; that becomes NaN.
+        with np.errstate(all="ignore"):
+            line = y[place] + slope[place] * (x - nodes[place])
+            return np.exp(line) if curved else line
 
 
 def fluid(
@@ -144,11 +150,17 @@ def fluid(
             f"{name} has both viscosity and kinematic_viscosity",
             allowed="one of the two; the other follows from the density",
         )
-    spreads = {property_name(prop): _spread(prop, u) for prop, u in (uncertainty or {}).items()}
-    return OwnFluid(name, curves, spreads=spreads)
+    return _checked(OwnFluid(name, curves, spreads=_read_spreads(uncertainty, curves)))
 
 
-def overlay(base: Fluid, values: Mapping[str, Any], *, at: Any, plausible: bool) -> OwnFluid:
+def overlay(
+    base: Fluid,
+    values: Mapping[str, Any],
+    *,
+    at: Any,
+    plausible: bool,
+    uncertainty: Mapping[str, float] | None,
+) -> OwnFluid:
     """`base` with some of its properties replaced; see `Fluid.with_values`."""
     if not values:
         raise BadInput("No values to replace", allowed="at least one of " + ", ".join(PROPERTIES))
@@ -157,12 +169,34 @@ def overlay(base: Fluid, values: Mapping[str, Any], *, at: Any, plausible: bool)
         raise BadInput("viscosity and kinematic_viscosity are both given", allowed="one of the two")
     trends = {}
     if at is not None:
-        kelvin = units.single(at, "temperature", "at")
+        kelvin = units.single(at, "temperature", "at", plausible=plausible)
         for prop, curve in curves.items():
-            scalar = base._shape() == () and len(curve.values) == 1
-            if scalar and prop in base.available():
+            if base._shape() == () and len(curve.values) == 1 and prop in base.available():
                 trends[prop] = curve.values[0] / base._evaluate(prop, kelvin, "raise")
-    return OwnFluid(base.name, curves, base=base, trends=trends)
+    spreads = _read_spreads(uncertainty, curves)
+    return _checked(OwnFluid(base.name, curves, base=base, trends=trends, spreads=spreads))
+
+
+def _read_spreads(given: Any, curves: Mapping[str, OwnCurve]) -> dict[str, float]:
+    if given is None:
+        return {}
+    if not isinstance(given, Mapping):
+        raise BadInput(
+            f"uncertainty is {given!r}", allowed="a mapping such as {'viscosity': '2 %'}"
+        )
+    for prop in given:
+        if property_name(prop) not in curves:
+            raise BadInput(f"uncertainty of {prop}, but no value of it", allowed=", ".join(curves))
+    return {prop: _spread(prop, value) for prop, value in given.items()}
+
+
+def _checked(made: OwnFluid) -> OwnFluid:
+    """The fluid, unless what follows from its values holds at no temperature."""
+    for prop in made.available():
+        limits = made._range(prop)
+        if limits.low > limits.high:
+            raise BadInput(f"{made.name}: {prop} would hold at no temperature")
+    return made
 
 
 class OwnFluid(Fluid):
@@ -217,43 +251,35 @@ class OwnFluid(Fluid):
         return tuple(prop for prop in PROPERTIES if prop in held)
 
     def _route(self, prop: str) -> str:
-        """Where a property comes from: "trend", "own", "product", "quotient" or "base"."""
+        """Where a property comes from: "trend", "own", "product" or "base"."""
         if prop in self._trends:
             return "trend"
         if prop in self._curves:
             return "own"
         if prop == "viscosity" and "kinematic_viscosity" in self._curves:
             return "product"
-        if prop == "kinematic_viscosity":
-            return "quotient"
         return "base"
 
-    def _parts(self, prop: str) -> tuple[str, str]:
-        other = "kinematic_viscosity" if prop == "viscosity" else "viscosity"
-        return other, "density"
+    def _is_quotient(self, prop: str) -> bool:
+        return prop == "kinematic_viscosity" and prop not in self._curves
 
     def _from_base(self) -> Fluid:
         assert self._base is not None
         return self._base
 
-    def _range(self, prop: str) -> Range:
+    def _record_range(self, prop: str) -> Range:
         route = self._route(prop)
         if route == "own":
             return self._curves[prop].range
-        if route in ("product", "quotient"):
-            first, second = (self._range(part) for part in self._parts(prop))
-            low, high = max(first.low, second.low), min(first.high, second.high)
-            if low > high:
-                raise BadInput(
-                    f"{self.name}: viscosity and density are given at different temperatures"
-                )
-            return Range(low, high)
+        if route == "product":
+            first, second = (self._record_range(part) for part in PRODUCT)
+            return Range(max(first.low, second.low), min(first.high, second.high))
         return self._from_base()._range(prop)
 
-    def _blocks(self, prop: str) -> Sequence[PropertyRecord]:
+    def _record_blocks(self, prop: str) -> Sequence[PropertyRecord]:
         route = self._route(prop)
-        if route in ("product", "quotient"):
-            return [block for part in self._parts(prop) for block in self._blocks(part)]
+        if route == "product":
+            return self._record_blocks("density")
         return () if route == "own" else self._from_base()._blocks(prop)
 
     def _shape(self) -> tuple[int, ...]:
@@ -263,101 +289,120 @@ class OwnFluid(Fluid):
         if self._base is None or self._shape() == ():
             return self
         wide = self._base._broadcast(shape)
-        return OwnFluid(self.name, self._curves, base=wide, trends=self._trends)
+        return OwnFluid(
+            self.name, self._curves, base=wide, trends=self._trends, spreads=self._spreads
+        )
 
-    def _scalar(self, prop: str) -> Callable[[float], float] | None:
+    def _record_scalar(self, prop: str) -> Callable[[float], float] | None:
         route = self._route(prop)
         if self._shape() != ():
             return None
         if route == "own":
             return self._curves[prop].scalar
-        if route in ("product", "quotient"):
-            first, second = (self._scalar(part) for part in self._parts(prop))
+        if route == "product":
+            first, second = (self._record_scalar(part) for part in PRODUCT)
             assert first is not None
             assert second is not None
-            if route == "product":
-                return lambda temperature: first(temperature) * second(temperature)
-            return lambda temperature: first(temperature) / second(temperature)
+            kinematic, density = first, second
+            return lambda temperature: kinematic(temperature) * density(temperature)
         value = self._from_base()._scalar(prop)
         if route == "trend" and value is not None:
             factor, inner = self._trends[prop], value
             return lambda temperature: factor * inner(temperature)
         return value
 
-    def _fill(self, prop: str, part: slice, temperature: FloatArray, out: FloatArray) -> None:
+    def _record_fill(
+        self, prop: str, part: slice, temperature: FloatArray, out: FloatArray
+    ) -> None:
         route = self._route(prop)
         if route == "own":
             out[:] = self._curves[prop].array(temperature)
-        elif route in ("product", "quotient"):
-            other, density = self._parts(prop)
-            second = np.empty_like(out)
-            self._fill(other, part, temperature, out)
-            self._fill(density, part, temperature, second)
-            (np.multiply if route == "product" else np.divide)(out, second, out=out)
+        elif route == "product":
+            density = np.empty_like(out)
+            self._record_fill("kinematic_viscosity", part, temperature, out)
+            self._record_fill("density", part, temperature, density)
+            np.multiply(out, density, out=out)
         else:
             self._from_base()._fill(prop, part, temperature, out)
             if route == "trend":
                 out *= self._trends[prop]
 
+    def _without_gaps(self, prop: str) -> bool:
+        parts = QUOTIENT if self._is_quotient(prop) else (prop,)
+        return all(
+            self._route(part) in ("own", "product") or self._from_base()._without_gaps(part)
+            for part in parts
+        )
+
     def _composition_is_settled(self) -> bool:
         return self._base is None or self._base._composition_is_settled()
 
-    def _settle_point(self, prop: str, temperature: Any, outside: str) -> Any:
+    def _record_settle(self, prop: str, temperature: Any, outside: str) -> Any:
         route = self._route(prop)
+        if route == "product":
+            return self._record_settle("density", temperature, outside)
         if route == "own" or self._base is None:
             return False
-        if route in ("product", "quotient"):
-            first, second = self._parts(prop)
-            mask = self._settle_point(first, temperature, outside)
-            return mask | self._settle_point(second, temperature, outside)
         return self._base._settle_point(prop, temperature, outside)
 
-    def _trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
+    def _record_trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
         route = self._route(prop)
         if route == "base":
             return self._from_base()._trail(prop, temperature)
-        if route == "quotient":
-            return quotient_trail(self, temperature)
         if route == "product":
-            other = self._curves["kinematic_viscosity"]
-            return self._own_trail(prop, f"kinematic viscosity times density ({other.method})", ())
-        if route == "trend":
-            curve = self._curves[prop]
+            kinematic = self._curves["kinematic_viscosity"]
+            method = f"kinematic viscosity times density ({kinematic.method})"
+            density = self._record_trail("density", temperature)
             return self._own_trail(
-                prop,
-                f"{curve.method}, times the trend of the record",
-                (f"{prop} follows the record's temperature trend away from the own value",),
+                prop, method, _constant("kinematic_viscosity", kinematic), density
             )
         curve = self._curves[prop]
-        constant = not curve.temperatures
-        assumed = (f"{prop} held constant over temperature",) if constant else ()
-        return self._own_trail(prop, curve.method, assumed)
+        if route == "trend":
+            assumed = (f"{prop} follows the record's temperature trend away from the own value",)
+            trend = self._from_base()._trail(prop, temperature)
+            return self._own_trail(
+                prop, f"{curve.method}, times the record's trend", assumed, trend
+            )
+        return self._own_trail(prop, curve.method, _constant(prop, curve), None)
 
-    def _own_trail(self, prop: str, method: str, assumptions: tuple[str, ...]) -> Trail:
+    def _own_trail(
+        self, prop: str, method: str, assumptions: tuple[str, ...], other: Trail | None
+    ) -> Trail:
+        """The trail of an own value, with that of the record which it leans on."""
         cautions = ("viscosity at low shear",) if prop == "viscosity" else ()
+        leant = (*other.assumptions, *assumptions) if other else assumptions
         return Trail(
             quantity=prop,
             subject=self.name,
             method=method,
-            grade="own",
+            grade=grade_with([other.grade] if other else []),
             uncertainty=self._spreads.get(prop),
-            assumptions=assumptions,
-            cautions=cautions,
+            records=other.records if other else (),
+            assumptions=tuple(dict.fromkeys(leant)),
+            cautions=tuple(dict.fromkeys((*(other.cautions if other else ()), *cautions))),
             versions=versions(),
         )
 
     @property
     def cautions(self) -> tuple[str, ...]:
         """Those of the fluid underneath; of one's own fluid only its maker knows more."""
-        if self._base is not None:
-            return self._base.cautions
-        return (f"{self.name}: own values; hazards are in its safety data sheet, not here",)
+        texts = list(self._base.cautions) if self._base is not None else []
+        if self._base is None:
+            texts.append(f"{self.name}: own values; hazards are in its safety data sheet, not here")
+        own = self._curves.get("electrical_conductivity")
+        if own is not None and min(own.values) < STATIC_ACCUMULATOR:
+            texts.append(f"{self.name}: below 50 pS/m, static accumulator")
+        return tuple(texts)
 
     def __repr__(self) -> str:
         return display.fluid_text(self, f"Fluid {self.name}, own values")
 
     def _repr_html_(self) -> str:
         return display.fluid_html(self, f"Fluid {self.name}, own values")
+
+
+def _constant(prop: str, curve: OwnCurve) -> tuple[str, ...]:
+    return () if curve.temperatures else (f"{prop} held constant over temperature",)
 
 
 def _spread(prop: str, value: Any) -> float:
@@ -368,7 +413,7 @@ def _spread(prop: str, value: Any) -> float:
 
 
 def _read(values: Mapping[str, Any], at: Any, plausible: bool) -> dict[str, OwnCurve]:
-    where = None if at is None else units.single(at, "temperature", "at")
+    where = None if at is None else units.single(at, "temperature", "at", plausible=plausible)
     return {
         property_name(prop): _read_one(prop, value, where, plausible)
         for prop, value in values.items()
@@ -382,7 +427,7 @@ def _read_one(prop: str, value: Any, at: float | None, plausible: bool) -> OwnCu
         return OwnCurve(prop, () if at is None else (at,), (number,))
     known = sorted(
         (
-            units.single(t, "temperature", f"temperature of {prop}"),
+            units.single(t, "temperature", f"temperature of {prop}", plausible=plausible),
             units.single(y, prop, prop, plausible=plausible),
         )
         for t, y in pairs

@@ -11,12 +11,13 @@ from dropkit import records
 from dropkit.errors import NotALiquid
 from dropkit.properties.catalogue import resolve
 from dropkit.properties.curves import Curve, FloatArray
-from dropkit.properties.interface import PROPERTIES, Fluid
-from dropkit.provenance import RecordUse, Trail, worst_grade
+from dropkit.properties.interface import Fluid
+from dropkit.properties.property_names import PROPERTIES
+from dropkit.properties.trails import record_use, relative_uncertainty, versions
+from dropkit.provenance import Trail, worst_grade
 from dropkit.validity import Range
-from dropkit.version import VERSION
 
-__all__ = ["Liquid", "liquid", "quotient_trail", "record_use", "relative_uncertainty", "versions"]
+__all__ = ["Liquid", "liquid"]
 
 
 def liquid(name: str) -> Liquid:
@@ -152,42 +153,27 @@ class Liquid(Fluid):
             self._curves[name] = Curve(blocks, inside_mixtures=inside_mixtures)
         return self._curves[name]
 
-    def _blocks(self, prop: str) -> Sequence[records.PropertyRecord]:
-        held = self.record.properties
-        if prop == "kinematic_viscosity":
-            return (*held["viscosity"], *held["density"])
-        return held[prop]
+    def _record_blocks(self, prop: str) -> Sequence[records.PropertyRecord]:
+        return self.record.properties[prop]
 
-    def _range(self, prop: str) -> Range:
-        if prop == "kinematic_viscosity":
-            density, viscosity = self.curve("density").range, self.curve("viscosity").range
-            return Range(max(density.low, viscosity.low), min(density.high, viscosity.high))
+    def _record_range(self, prop: str) -> Range:
         return self.curve(prop).range
 
-    def _scalar(self, prop: str) -> Callable[[float], float]:
-        if prop == "kinematic_viscosity":
-            density, viscosity = self.curve("density").scalar, self.curve("viscosity").scalar
-            return lambda temperature: viscosity(temperature) / density(temperature)
+    def _record_scalar(self, prop: str) -> Callable[[float], float]:
         return self.curve(prop).scalar
 
-    def _fill(self, prop: str, part: slice, temperature: FloatArray, out: FloatArray) -> None:
-        if prop == "kinematic_viscosity":
-            density = np.empty_like(out)
-            self.curve("viscosity").fill(temperature, out)
-            self.curve("density").fill(temperature, density)
-            np.divide(out, density, out=out)
-        else:
-            self.curve(prop).fill(temperature, out)
+    def _record_fill(
+        self, prop: str, part: slice, temperature: FloatArray, out: FloatArray
+    ) -> None:
+        self.curve(prop).fill(temperature, out)
 
-    def _trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
-        if prop == "kinematic_viscosity":
-            return quotient_trail(self, temperature)
+    def _record_trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
         from dropkit.properties.cautions import liquid_phases
 
         curve = self.curve(prop)
         serving = _serving(curve, temperature)
         blocks = [curve.records[number] for number in serving]
-        value = None if temperature is None else _midvalue(curve, temperature)
+        value = None if temperature is None else _smallest(curve, temperature)
         cautions = [text for block in blocks for text in block.cautions]
         if prop == "viscosity":
             cautions.append("viscosity at low shear")
@@ -215,34 +201,6 @@ class Liquid(Fluid):
         return display.fluid_html(self, f"Liquid {self.name}, CAS {self.cas}, {self.formula}")
 
 
-def versions() -> dict[str, str]:
-    """Versions of dropkit and its data, for trails."""
-    return {"dropkit": VERSION, "data": records.data_version()}
-
-
-def record_use(block: records.PropertyRecord) -> RecordUse:
-    """A record as it stands in a trail."""
-    return RecordUse(
-        record=block.label,
-        property=block.property,
-        form=block.form,
-        grade=block.grade,
-        sources=block.sources,
-        place=block.place,
-        obtained=block.obtained,
-        range=str(block.range),
-        uncertainty=relative_uncertainty(block, None),
-    )
-
-
-def relative_uncertainty(block: records.PropertyRecord, value: float | None) -> float:
-    """Relative standard uncertainty of a record, from an absolute one by way of a value."""
-    if block.uncertainty_absolute is None:
-        return block.uncertainty
-    scale = value if value is not None else float(block.checks[0]["value"])
-    return block.uncertainty_absolute / scale
-
-
 def _serving(curve: Curve, temperature: float | FloatArray | None) -> list[int]:
     """Numbers of the records that serve some temperatures; all of them for None."""
     if temperature is None or len(curve.records) == 1:
@@ -251,7 +209,7 @@ def _serving(curve: Curve, temperature: float | FloatArray | None) -> list[int]:
     return sorted({curve.serving(t) for t in kelvin[~np.isnan(kelvin)]}) or [0]
 
 
-def _midvalue(curve: Curve, temperature: float | FloatArray) -> float | None:
+def _smallest(curve: Curve, temperature: float | FloatArray) -> float | None:
     """The smallest value over some temperatures, clear of the ends of the range."""
     kelvin = np.asarray(temperature, dtype=float).reshape(-1)
     kelvin = kelvin[(kelvin >= curve.range.low) & (kelvin <= curve.range.high)]
@@ -260,20 +218,3 @@ def _midvalue(curve: Curve, temperature: float | FloatArray) -> float | None:
     out = np.empty(kelvin.size)
     curve.fill(np.ascontiguousarray(kelvin), out)
     return float(out.min())
-
-
-def quotient_trail(fluid: Fluid, temperature: float | FloatArray | None) -> Trail:
-    """The trail of kinematic viscosity from those of viscosity and density."""
-    parts = [fluid._trail(name, temperature) for name in ("viscosity", "density")]
-    known = [part.uncertainty for part in parts if part.uncertainty is not None]
-    return Trail(
-        quantity="kinematic_viscosity",
-        subject=fluid.name,
-        method=f"viscosity over density ({'; '.join(dict.fromkeys(p.method for p in parts))})",
-        grade=worst_grade(part.grade for part in parts),
-        uncertainty=float(np.hypot.reduce(known)) if known else None,
-        records=tuple(record for part in parts for record in part.records),
-        assumptions=tuple(dict.fromkeys(text for part in parts for text in part.assumptions)),
-        cautions=tuple(dict.fromkeys(text for part in parts for text in part.cautions)),
-        versions=parts[0].versions,
-    )

@@ -13,8 +13,9 @@ from dropkit.errors import BadInput, CompositionError, UnknownName, nearest
 from dropkit.properties import display
 from dropkit.properties.composition import Composition, check_basis, to_mass
 from dropkit.properties.curves import FloatArray
-from dropkit.properties.interface import Fluid, property_name
+from dropkit.properties.interface import Fluid
 from dropkit.properties.mixtures import Mixture
+from dropkit.properties.property_names import property_name
 
 if TYPE_CHECKING:
     import pandas as pd
@@ -46,8 +47,8 @@ class Found:
         Ends of the search.
     reaches : tuple of float
         Lowest and highest value [SI] of the property between them.
-    in_units : bool
-        Whether `solutions` come as Quantities where they have a unit.
+    asked : Asked, optional
+        How it was asked; `solutions` come as Quantities where it is given.
     """
 
     quantity: str
@@ -58,15 +59,14 @@ class Found:
     fluids: tuple[Fluid, ...]
     between: tuple[float, float]
     reaches: tuple[float, float]
-    in_units: bool = False
+    asked: units.Asked | None = None
 
     @property
     def solutions(self) -> list[Any]:
         """All solutions as they were asked: fractions, kelvin, or temperatures with a unit."""
         if self.vary != "temperature":
             return list(self.values)
-        asked = units.Asked() if self.in_units else None
-        return [units.give(value, "temperature", asked) for value in self.values]
+        return [units.give(value, "temperature", self.asked) for value in self.values]
 
     def __len__(self) -> int:
         return len(self.values)
@@ -141,14 +141,16 @@ class Found:
             "mass_fractions": [fluid.mass_fractions for fluid in mixtures],
             "between": list(self.between),
             "reaches": list(self.reaches),
-            "in_units": self.in_units,
+            "in_units": self.asked is not None,
             "message": self.message,
         }
 
     @classmethod
     def from_dict(cls, data: dict[str, Any]) -> Found:
         """Rebuild a result from `to_dict`; fluids come back where they are mixtures."""
-        if not isinstance(data, dict) or data.get("kind") != "Found":
+        needed = {"quantity", "target", "vary", "by", "values", "mass_fractions", "between",
+                  "reaches", "in_units"}  # fmt: skip
+        if not isinstance(data, dict) or data.get("kind") != "Found" or not needed <= data.keys():
             raise BadInput("This is no dict of a Found", allowed="what Found.to_dict() gave")
         fluids = tuple(
             Mixture(Composition(tuple(parts), tuple(parts.values())), quiet=True)
@@ -156,7 +158,8 @@ class Found:
         )
         return cls(
             data["quantity"], data["target"], data["vary"], data["by"], tuple(data["values"]),
-            fluids, tuple(data["between"]), tuple(data["reaches"]), data["in_units"],
+            fluids, tuple(data["between"]), tuple(data["reaches"]),
+            units.Asked() if data["in_units"] else None,
         )  # fmt: skip
 
 
@@ -183,24 +186,32 @@ def find(
         raise BadInput(f"The wanted {prop} is {wanted!r}", allowed="one finite value")
     if fluid._shape() != ():
         raise BadInput(f"{fluid.name} has an array of compositions", allowed="one composition")
-    in_units = asked is not None
     if vary is None and at is None:
         vary = "temperature"
+    elif vary is None and isinstance(fluid, Mixture):
+        free = [key for key in fluid.components if key != fluid._composition.rest]
+        if len(free) != 1:
+            raise BadInput(
+                "find needs vary=", allowed=", ".join((*fluid.components, "temperature"))
+            )
+        vary = free[0]
+    if vary is not None and not isinstance(vary, str):
+        raise BadInput(f"vary={vary!r}", allowed="the name of a component, or 'temperature'")
     if vary == "temperature":
-        return _by_temperature(fluid, prop, value, at, between, in_units)
+        return _by_temperature(fluid, prop, value, at, between, asked)
     if at is None:
         raise BadInput("find needs at=, the temperature", allowed="such as at='20 degC'")
-    kelvin = units.single(at, "temperature", "at")
+    kelvin = units.single(at, "temperature", "at", plausible=plausible)
     if not isinstance(fluid, Mixture):
         raise BadInput(
             f"{fluid.name} has no composition to vary",
             allowed="a mixture, or vary='temperature'",
         )
-    return _by_composition(fluid, prop, value, kelvin, vary, between, by, in_units)
+    return _by_composition(fluid, prop, value, kelvin, vary, between, by, asked)
 
 
 def _by_temperature(
-    fluid: Fluid, prop: str, value: float, at: Any, between: Any, in_units: bool
+    fluid: Fluid, prop: str, value: float, at: Any, between: Any, asked: units.Asked | None
 ) -> Found:
     if at is not None:
         raise BadInput("at= fixes the temperature that is to be varied", allowed="one of the two")
@@ -221,13 +232,13 @@ def _by_temperature(
     roots, reaches = _roots(scalar, grid, fluid._evaluate(prop, grid, "nan"), value)
     return Found(
         prop, value, "temperature", "mass", roots, (fluid,) * len(roots), (low, high), reaches,
-        in_units,
+        asked,
     )  # fmt: skip
 
 
 def _by_composition(
     fluid: Mixture, prop: str, value: float, kelvin: float, vary: Any, between: Any, by: str,
-    in_units: bool,
+    asked: units.Asked | None,
 ) -> Found:  # fmt: skip
     key = _component(fluid, vary)
     shares = fluid.fractions(by)
@@ -262,7 +273,7 @@ def _by_composition(
 
     roots, reaches = _roots(scalar, grid, values, value)
     fluids = tuple(compose(root) for root in roots)
-    return Found(prop, value, key, by, roots, fluids, (low, high), reaches, in_units)
+    return Found(prop, value, key, by, roots, fluids, (low, high), reaches, asked)
 
 
 def _fill_up(others: Mapping[str, Any], share: Any, rest: str, before: float) -> dict[str, Any]:
@@ -295,8 +306,9 @@ def _ends(between: Any, kind: str, allowed: tuple[float, float]) -> tuple[float,
         first, second = between
     except (TypeError, ValueError) as problem:
         raise BadInput(f"between is {between!r}", allowed="a pair of ends") from problem
-    low = units.single(first, kind, "between")
-    high = units.single(second, kind, "between")
+    warm = kind == "temperature"
+    low = units.single(first, kind, "between", plausible=warm)
+    high = units.single(second, kind, "between", plausible=warm)
     if not allowed[0] <= low < high <= allowed[1]:
         raise BadInput(
             f"between runs from {low:g} to {high:g}",

@@ -10,8 +10,9 @@ import numpy as np
 from dropkit import units
 from dropkit.errors import BadInput, MissingProperty
 from dropkit.properties import display
-from dropkit.properties.interface import GRADED, PROPERTIES, Fluid, property_name
-from dropkit.properties.jsonable import from_plain, to_plain
+from dropkit.properties.interface import Fluid
+from dropkit.properties.jsonable import from_plain, frozen, to_plain
+from dropkit.properties.property_names import GRADED, PROPERTIES, property_name
 from dropkit.provenance import Grade, Trail, worst_grade
 from dropkit.validity import Outside
 
@@ -19,6 +20,11 @@ if TYPE_CHECKING:
     import pandas as pd
 
 __all__ = ["State"]
+
+TABLE_COLUMNS = [
+    "property", "value", "unit", "uncertainty", "uncertainty_95", "grade", "method", "sources",
+    "range",
+]  # fmt: skip
 
 
 class State:
@@ -58,7 +64,7 @@ class State:
         name: str = "",
     ) -> None:
         self._fluid = fluid
-        self._temperature = temperature
+        self._temperature = frozen(temperature)
         self._asked = asked
         self._outside = outside
         self.name = fluid.name if fluid is not None else name
@@ -66,6 +72,20 @@ class State:
         self._trails: dict[str, Trail] = {}
         self._reasons: dict[str, str] = {}
         self._cautions: tuple[str, ...] | None = None
+
+    def __getstate__(self) -> dict[str, Any]:
+        # Pickled whole: every number and trail, so that it needs no record where it arrives.
+        reasons = {}
+        for prop, _, trail, reason in self._given():
+            if trail is None:
+                reasons[prop] = reason
+        cautions = self.cautions
+        return {**self.__dict__, "_fluid": None, "_reasons": reasons, "_cautions": cautions}
+
+    def __eq__(self, other: object) -> bool:
+        return isinstance(other, State) and other.to_dict() == self.to_dict()
+
+    __hash__ = None  # type: ignore[assignment] # values may be arrays
 
     # ------------------------------------------------ how it was asked
     def si(self) -> State:
@@ -287,7 +307,7 @@ class State:
         rows = []
         for prop, value, trail, reason in self._given():
             if trail is None:
-                rows.append({"property": prop, "value": value, "method": reason})
+                rows.append({"property": prop, "value": value, "grade": "", "method": reason})
                 continue
             if trail.grade == "estimated" and not estimates:
                 continue
@@ -306,7 +326,7 @@ class State:
                     "range": trail.range,
                 }
             )
-        return pd.DataFrame(rows).set_index("property")
+        return pd.DataFrame(rows, columns=TABLE_COLUMNS).set_index("property")
 
     def to_dict(self) -> dict[str, Any]:
         """A dict of plain types that survives JSON; `from_dict` rebuilds the state."""
@@ -331,7 +351,8 @@ class State:
     @classmethod
     def from_dict(cls, data: dict[str, Any]) -> State:
         """Rebuild a state from `to_dict`; it keeps its numbers and trails, not its fluid."""
-        if not isinstance(data, dict) or data.get("kind") != "State":
+        needed = {"name", "temperature", "with_units", "values", "trails", "reasons", "cautions"}
+        if not isinstance(data, dict) or data.get("kind") != "State" or not needed <= data.keys():
             raise BadInput("This is no dict of a State", allowed="what State.to_dict() gave")
         state = cls(
             None,
@@ -360,7 +381,7 @@ class State:
         return f"{self.name} at {celsius} degC ({kelvin} K)"
 
     def __repr__(self) -> str:
-        return display.sheet_text(self._title, self._rows())
+        return display.sheet_text(self._title, self._rows(), self.cautions)
 
     def _repr_html_(self) -> str:
         return display.sheet_html(self._title, self._rows(), self.cautions)

@@ -22,8 +22,8 @@ import pandas as pd
 import dropkit as dk
 from dropkit import records
 from dropkit.properties.composition import to_mass
-from dropkit.properties.interface import GRADED
 from dropkit.properties.points import exclusion
+from dropkit.properties.property_names import GRADED
 
 PAGE_HEAD = """# How close the records come to published points
 

@@ -2,11 +2,14 @@
 
 from __future__ import annotations
 
+from typing import Any
+
+import numpy as np
 import pytest
 
 from dropkit import models
 from dropkit.boundary import Boundary
-from dropkit.errors import UnknownName
+from dropkit.errors import BadInput, UnknownName
 from dropkit.models.catalogue import model_entries, published_models
 from dropkit.models.families import family_modules, family_names, lazy_family, model_families
 from dropkit.models.published import MARKS, Published
@@ -60,6 +63,13 @@ def test_table() -> None:
 def test_unknown_family() -> None:
     with pytest.raises(UnknownName, match="jet"):
         model_entries("jets")
+
+
+@pytest.mark.parametrize("family", [np.array([1.0, 2.0]), np.array(["jet"]), 1, ["jet"]], ids=str)
+def test_only_text_names_a_family(family: Any) -> None:
+    for ask in (model_entries, published_models):
+        with pytest.raises(BadInput, match="names no family"):
+            ask(family)
 
 
 def test_names_are_found_lazily() -> None:

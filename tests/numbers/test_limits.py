@@ -4,11 +4,13 @@ from __future__ import annotations
 
 import itertools
 import math
+from typing import Any
 
+import numpy as np
 import pytest
 
 from dropkit import numbers
-from dropkit.errors import UnknownName
+from dropkit.errors import BadInput, UnknownName
 from dropkit.numbers.catalogue import entries
 from dropkit.numbers.limits import LIMITS, Limit, limits_of
 from dropkit.records import source
@@ -74,3 +76,9 @@ def test_a_number_without_limits_has_none_and_an_unknown_one_raises() -> None:
     assert limits_of("galilei") == ()
     with pytest.raises(UnknownName, match="weber"):
         numbers.limits_of("webber")
+
+
+@pytest.mark.parametrize("name", [np.array([1.0, 2.0]), np.array(["weber"]), None, 3.0], ids=str)
+def test_only_text_names_a_number(name: Any) -> None:
+    with pytest.raises(BadInput, match="names no number"):
+        limits_of(name)

@@ -225,6 +225,51 @@ def test_bad_input() -> None:
         numbers.NumbersSheet.from_dict({"kind": "State"})
 
 
+@pytest.mark.parametrize("gas", ["air", 1.2, dk.air, np.array([1.2])], ids=str)
+def test_a_gas_that_holds_no_properties_is_refused(gas: Any) -> None:
+    with pytest.raises(BadInput, match=r"gas = .* has no density.*dk\.air\(\"25 degC\"\)"):
+        dk.liquid("water").at("20 degC").numbers("60 um", "10 m/s", gas=gas)
+    with pytest.raises(BadInput, match=r"state = .* has no density.*\.at\("):
+        numbers_sheet(gas, "60 um")
+
+
+def test_a_gas_whose_density_is_out_of_range_only_leaves_out() -> None:
+    class Hot:
+        viscosity = 3e-5
+
+        @property
+        def density(self) -> float:
+            raise OutOfRange("outside")
+
+    sheet = numbers_sheet(ink(), 1e-4, 1.0, gas=Hot())
+    assert sheet.missing["gas_weber"] == "needs gas_density"
+    assert "weber" in sheet
+
+
+def test_answers_in_the_registry_of_the_first_quantity() -> None:
+    import pint
+
+    first, second = pint.UnitRegistry(), pint.UnitRegistry()
+    state = ink(density=second.Quantity(1.0, "g/cm^3"))
+    sheet = numbers_sheet(state, "25 um", first.Quantity(6.0, "m/s"), frequency="60 kHz")
+    assert sheet["capillary_length"]._REGISTRY is first
+    assert sheet.si().with_units()["capillary_length"]._REGISTRY is not first
+    assert sheet.with_units()["viscous_time"]._REGISTRY is first
+    by_state = numbers_sheet(state, "25 um", 6.0)
+    assert by_state["capillary_length"]._REGISTRY is second
+    by_text = numbers_sheet(ink(), "25 um", 6.0)
+    assert by_text["capillary_length"]._REGISTRY is pint.application_registry.get()
+    # A dict and a pickle hold no registry.
+    assert sheet.to_dict()["with_units"] is True
+    assert sheet.si().to_dict()["with_units"] is False
+    for copy in (
+        pickle.loads(pickle.dumps(sheet)),
+        numbers.NumbersSheet.from_dict(sheet.to_dict()),
+    ):
+        assert copy["capillary_length"]._REGISTRY is pint.application_registry.get()
+        assert copy["capillary_length"].magnitude == sheet["capillary_length"].magnitude
+
+
 def test_zero_speed_leaves_out_what_divides_by_it() -> None:
     sheet = numbers_sheet(ink(), 1e-4, 0.0, frequency=1e4)
     assert sheet["weber"] == 0.0

@@ -173,7 +173,8 @@ def test_windows_lines_mirror_the_posix_ones() -> None:
     posix = [line for b in readme if b.language == "sh" for line in b.text.splitlines()]
     windows = [line for b in readme if b.language == "bat" for line in b.text.splitlines()]
     translated = [
-        line.replace("python3 -m venv", "py -m venv")
+        # Without a number `py` takes the newest Python that it finds, also one that is refused.
+        line.replace("python3 -m venv", "py -3.13 -m venv")
         .replace(".venv/bin/", ".venv\\Scripts\\")
         .replace("examples/", "examples\\")
         .replace("'", '"')

@@ -76,8 +76,9 @@ def stimulated_breakup_length(
     Notes
     -----
     ``L = U ln(a/eps0)/w`` [C], ``a`` the radius of the jet, ``eps0`` the amplitude. An amplitude
-    as large as the radius gives 0. The logarithm is not a constant of nature: from natural jets
-    it came out between 6 and 23, and one tenth of the amplitude adds 2.3 to it.
+    as large as the radius or larger leaves no jet to break: NaN, with one warning. The logarithm
+    is not a constant of nature: from natural jets it came out between 6 and 23, and one tenth of
+    the amplitude adds 2.3 to it.
 
     References
     ----------
@@ -92,7 +93,12 @@ def stimulated_breakup_length(
     """
     ratio: Any = 2.0 * radius_amplitude / jet_diameter
     mask = outside_mask("stimulated_breakup_length", outside, (ratio, LINEAR))
-    # Powers don't give a logarithm, so floats and arrays part here.
-    folds: Any = -np.log(ratio) if isinstance(ratio, np.ndarray) else -math.log(ratio)
+    # Powers don't give a logarithm, so floats and arrays part here. Without a logarithm above
+    # zero there is no length: the boundary warns of the NaN.
+    folds: Any
+    if isinstance(ratio, np.ndarray):
+        folds = np.where(ratio < 1.0, -np.log(ratio), np.nan)
+    else:
+        folds = -math.log(ratio) if ratio < 1.0 else math.nan
     result: float = blank_outside(velocity * folds / growth_rate, mask)
     return result

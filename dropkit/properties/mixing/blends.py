@@ -14,10 +14,11 @@ from typing import Any, Final
 import numpy as np
 
 from dropkit import records
-from dropkit.errors import EstimateRefused, MissingProperty
+from dropkit.errors import CompositionError, EstimateRefused, MissingProperty
 from dropkit.properties.composition import reference_density
 from dropkit.properties.curves import Curve, FloatArray, stepwise
 from dropkit.properties.mixing import electrolytes
+from dropkit.properties.mixing.estimates import estimate_error
 from dropkit.properties.mixing.pair import Pair, share_of
 from dropkit.properties.mixing.redlich_kister import RULES, collapse, reduced_temperature
 from dropkit.provenance import GRADES
@@ -37,16 +38,6 @@ _SALT_FORMS: Final = {
 def blend(prop: str, keys: tuple[str, ...]) -> Blend:
     """The `Blend` of a property for some components, made once."""
     return Blend(prop, keys)
-
-
-@cache
-def estimate_errors() -> dict[str, Any]:
-    """Measured errors of estimates on pairs that were hidden from the rule."""
-    # Imported here: fitted mixtures do without.
-    import tomllib
-
-    path = records.data_dir() / "mixtures-estimates.toml"
-    return tomllib.loads(path.read_text(encoding="utf-8"))
 
 
 class Blend:
@@ -87,7 +78,7 @@ class Blend:
                 )
         self.curves = [Curve(e.properties[prop], inside_mixtures=True) for e in self.records]
         self.inverse_density = [
-            1.0 / reference_density(keys[i]) if self.basis == "volume" else 1.0
+            1.0 / _reference_density(keys[i]) if self.basis == "volume" else 1.0
             for i in self.solvents
         ]
         self.pairs: list[Pair] = []
@@ -96,6 +87,12 @@ class Blend:
             self._read_pair(i, j)
         self.salts = [self._read_salt(entries[i]) for i in self.solutes]
         self.caps = self._read_caps()
+        if prop == "refractive_index" and self.estimated:
+            raise EstimateRefused(
+                "The refractive index of a pair without a record is not estimated: contraction "
+                "shifts it by more than a refractometer's use allows",
+                hint="Measure it and add it: with_values(refractive_index=...)",
+            )
 
     def _read_pair(self, i: int, j: int) -> None:
         a, b = self.records[i].key, self.records[j].key
@@ -166,6 +163,10 @@ class Blend:
         """Mass share of a pair's first component in the two."""
         return share_of(mass[self.solvents[pair.first]], mass[self.solvents[pair.second]])
 
+    def without_gaps(self, mass: Sequence[float]) -> bool:
+        """Whether one composition is served at all temperatures between the ends."""
+        return all(pair.without_gaps(self._share(pair, mass)) for pair in self.pairs)
+
     def composition_limits(self, mass: Sequence[Any]) -> list[tuple[Any, Range]]:
         """Shares of the pairs and of the salts, with the ranges that they must keep."""
         found = []
@@ -176,9 +177,11 @@ class Blend:
                 found.append((self._share(pair, mass), limits))
         for number, block in zip(self.solutes, self.salts, strict=True):
             low, high = block.parameters.get("fraction_range", (0.0, 1.0))
-            name = f"mass fraction of {self.keys[number].replace('_', ' ')}"
-            total = sum(mass[i] for i in self.solutes)
-            found.append((total, Range(float(low), float(high), name, "")))
+            salt = self.keys[number].replace("_", " ")
+            name = f"mass fraction of {salt} in {salt} + water"
+            limits = Range(float(low), float(high), name, "")
+            solutes = sum(mass[i] for i in self.solutes)
+            found.append((share_of(solutes, mass[self.keys.index("water")]), limits))
         return found
 
     def unserved(self, mass: Sequence[Any], temperature: Any) -> Any:
@@ -238,12 +241,11 @@ class Blend:
         """Relative standard uncertainty that an estimate adds; 0 without one."""
         if not self.estimated:
             return 0.0
-        table = estimate_errors()[self.property]
         watery = any(
             "water" in (self.records[i].key, self.records[j].key) for i, j in self.unfitted
         )
         watery = watery or bool(self.solutes)
-        return float(table["with_water" if watery else "without_water"]["uncertainty"])
+        return estimate_error(self.property, with_water=watery)
 
     @property
     def method(self) -> str:
@@ -278,26 +280,27 @@ class Blend:
         shares = [self._share(pair, mass) for pair in self.pairs]
         held = [pair.holding(x) or [0] for pair, x in zip(self.pairs, shares, strict=True)]
         if all(len(numbers) == 1 for numbers in held):
-            value = self._fixed(fractions, ends, [numbers[0] for numbers in held])
-        else:
-            value = self._piecewise(fractions, ends, shares, held)
-        return self._salted_scalar(value, mass) if self.salts else value
+            return self._fixed(mass, fractions, ends, [numbers[0] for numbers in held])
+        return self._piecewise(mass, fractions, ends, shares, held)
 
     def _fixed(
         self,
+        mass: Sequence[float],
         fractions: Sequence[float],
         ends: Sequence[Callable[[float], float]],
         numbers: Sequence[int],
     ) -> Callable[[float], float]:
-        """The solvent's value at one composition, with one record chosen for each pair."""
+        """The value at one composition, with one record chosen for each pair."""
         if len(ends) == 1:
-            return ends[0]
+            return self._salted_scalar(ends[0], mass) if self.salts else ends[0]
         chosen = [(pair, pair.excesses[k]) for pair, k in zip(self.pairs, numbers, strict=True)]
         excess = [
             entry.at_composition(fractions[pair.first], fractions[pair.second])
             for pair, entry in chosen
         ]
         value = collapse(self.transform, ends, fractions, excess)
+        if self.salts:
+            value = self._salted_scalar(value, mass)
         for pair, entry in chosen:
             if pair in self.caps:
                 share = share_of(fractions[pair.first], fractions[pair.second])
@@ -309,6 +312,7 @@ class Blend:
 
     def _piecewise(
         self,
+        mass: Sequence[float],
         fractions: Sequence[float],
         ends: Sequence[Callable[[float], float]],
         shares: Sequence[float],
@@ -330,7 +334,7 @@ class Blend:
                 for pair, share in zip(self.pairs, shares, strict=True)
             )
             if numbers not in made:
-                made[numbers] = self._fixed(fractions, ends, numbers)
+                made[numbers] = self._fixed(mass, fractions, ends, numbers)
             return made[numbers]
 
         between = [serving(t) for t in (edges[0] - 1.0, *middles, edges[-1] + 1.0)]
@@ -340,7 +344,8 @@ class Blend:
         self, solvent: Callable[[float], float], mass: Sequence[float]
     ) -> Callable[[float], float]:
         def value(temperature: float) -> float:
-            return float(self._salted(solvent(temperature), mass, temperature))
+            with np.errstate(all="ignore"):
+                return float(self._salted(solvent(temperature), mass, temperature))
 
         return value
 
@@ -391,17 +396,17 @@ class Blend:
             reduced = reduced_temperature(temperature)
             shaped = [_forward(self.transform, end) for end in ends]
             self._sum(fractions, shaped, self.pairs, mass, temperature, reduced, out)
-            for pair in self.caps:
-                i, j = pair.first, pair.second
-                share = share_of(fractions[i], fractions[j])
-                two: list[Any] = [0.0] * len(ends)
-                two[i], two[j] = share, 1.0 - share
-                cap = np.empty_like(out)
-                self._sum(two, shaped, [pair], mass, temperature, reduced, cap)
-                present = np.asarray(fractions[i] + fractions[j]) > 0.0
-                np.minimum(out, cap, out=out, where=present)
         if self.salts:
             out[:] = self._salted(out, mass, temperature)
+        for pair in self.caps:
+            i, j = pair.first, pair.second
+            share = share_of(fractions[i], fractions[j])
+            two: list[Any] = [0.0] * len(ends)
+            two[i], two[j] = share, 1.0 - share
+            cap = np.empty_like(out)
+            self._sum(two, shaped, [pair], mass, temperature, reduced, cap)
+            present = np.asarray(fractions[i] + fractions[j]) > 0.0
+            np.minimum(out, cap, out=out, where=present)
 
     def _sum(
         self,
@@ -426,6 +431,13 @@ class Blend:
             np.exp(out, out=out)
         elif self.transform == "reciprocal":
             np.reciprocal(out, out=out)
+
+
+def _reference_density(key: str) -> float:
+    try:
+        return reference_density(key)
+    except CompositionError as problem:
+        raise MissingProperty(f"Volume fractions need it: {problem.what}") from problem
 
 
 def _forward(transform: str, value: FloatArray) -> FloatArray:

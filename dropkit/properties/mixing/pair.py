@@ -50,6 +50,18 @@ class Pair:
         """Numbers of the records whose composition range holds a mass share of the first."""
         return [k for k, (low, high) in enumerate(self.shares) if low <= share <= high]
 
+    def without_gaps(self, share: float) -> bool:
+        """Whether the records that hold a share serve all temperatures between their ends."""
+        held = sorted((self.blocks[k].range for k in self.holding(share)), key=lambda r: r.low)
+        if not held:
+            return False
+        high = held[0].high
+        for limits in held[1:]:
+            if limits.low > high:
+                return False
+            high = max(high, limits.high)
+        return True
+
     def range(self, share: float | None) -> Range:
         """Temperatures that some record serves, at a share or (None) at any."""
         chosen = list(range(len(self.blocks))) if share is None else self.holding(share)

@@ -14,7 +14,7 @@ import pytest
 from hypothesis import given
 from hypothesis import strategies as st
 
-from dropkit.errors import OutOfRange, Unphysical
+from dropkit.errors import DropkitWarning, OutOfRange, Unphysical
 from dropkit.models import jet
 from dropkit.records import data_dir
 
@@ -217,6 +217,22 @@ def test_stimulated_needs_a_small_growing_wave() -> None:
         jet.stimulated_breakup_length(10.0, 60e-6, 0.0, 1e-8)
     many = jet.stimulated_breakup_length(10.0, 60e-6, 1e4, [1e-8, 1e-5], outside="nan")
     assert np.isnan(many).tolist() == [False, True]
+
+
+@pytest.mark.parametrize("share", [1.0, 1.5, 40.0])
+def test_stimulated_has_no_length_where_the_wave_is_as_large_as_the_jet(share: float) -> None:
+    radius = 2.0**-15  # so that the share is exact
+    case = (10.0, 2.0 * radius, 1e4)
+    with pytest.warns(DropkitWarning, match=r"1 result\(s\)") as caught:
+        alone = jet.stimulated_breakup_length(*case, share * radius, outside="allow")
+    assert math.isnan(alone)
+    assert len(caught) == 1
+    sizes = np.array([0.5, share, math.nan]) * radius
+    with pytest.warns(DropkitWarning, match=r"1 result\(s\)") as caught:
+        many = jet.stimulated_breakup_length(*case, sizes, outside="allow")
+    assert len(caught) == 1
+    assert np.isnan(many).tolist() == [False, True, True]
+    assert many[0] == pytest.approx(10.0 * math.log(2.0) / 1e4)
 
 
 def test_measured_lengths_with_one_disturbance_level() -> None:
