@@ -14,7 +14,7 @@ from dropkit.properties.catalogue import resolve
 from dropkit.properties.composition import Composition, check_basis, from_mass, to_mass
 from dropkit.properties.mixtures import Mixture
 from dropkit.properties.points import pair_points
-from dropkit.properties.property_names import property_name
+from dropkit.properties.property_words import property_name
 
 if TYPE_CHECKING:
     from matplotlib.axes import Axes
@@ -79,20 +79,27 @@ def property_over_composition(
     if keys[0] == keys[1]:
         raise BadInput(f"{first} and {second} are the same", allowed="two components")
     axes = axes_or_new(ax)
-    kelvins = np.atleast_1d(np.asarray(units.to_si(at, "temperature", "at"), dtype=float))
+    kelvins = np.ravel(
+        np.asarray(units.to_si(at, "temperature", "at", plausible=True), dtype=float)
+    )
+    if not kelvins.size:
+        raise BadInput("at is empty", allowed="one or more temperatures")
     share = np.linspace(0.0, 1.0, 201)
     mass = to_mass(keys, (share, 1.0 - share), by)
     pair = Mixture(Composition(keys, mass), estimates="allow", quiet=True)
     marks: dict[str, str] = {}
     for number, kelvin in enumerate(kelvins):
         values = display.in_stock(property, pair._evaluate(property, np.asarray(kelvin), "nan"))
+        if not np.isfinite(values).any():
+            pair._evaluate(property, np.asarray(kelvin), "raise")  # says what the range is
         colour = f"C{number}"
         axes.plot(share, values, color=colour, label=f"{kelvin - 273.15:g} degC")
         if band:
             known = pair._trail(property, float(kelvin)).uncertainty or 0.0
             axes.fill_between(
                 share,
-                values * (1.0 - 2.0 * known),
+                # Beyond a half a band is a factor, up and down.
+                values * (1.0 - 2.0 * known if known < 0.25 else 1.0 / (1.0 + 2.0 * known)),
                 values * (1.0 + 2.0 * known),
                 color=colour,
                 alpha=0.18,

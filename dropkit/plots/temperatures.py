@@ -12,7 +12,7 @@ from dropkit.plots.axes import axes_or_new, label, markers
 from dropkit.properties import display
 from dropkit.properties.interface import Fluid
 from dropkit.properties.points import pure_points
-from dropkit.properties.property_names import property_name
+from dropkit.properties.property_words import property_name
 from dropkit.properties.pure import Liquid, liquid
 
 if TYPE_CHECKING:
@@ -76,36 +76,52 @@ def property_over_temperature(
         limits = item.range(property)
         low, high = limits.low, limits.high
         if between is not None:
-            low, high = (units.single(end, "temperature", "between") for end in between)
+            low, high = _ends(between)
         if not np.isfinite(high):
             low, high = 273.15, 373.15
         kelvin = np.linspace(low, high, 301)
-        values = display.in_stock(property, item._evaluate(property, kelvin, "nan"))
+        found = item._evaluate(property, kelvin, "nan")
+        if not np.isfinite(found).any():
+            item._evaluate(property, kelvin, "raise")  # says what the range is
+        values = display.in_stock(property, found)
         (line,) = axes.plot(kelvin - 273.15, values, label=item.name, color=f"C{number}")
         if band:
             spread = np.array([item._trail(property, t).uncertainty or 0.0 for t in kelvin[::30]])
             wide = 2.0 * np.interp(kelvin, kelvin[::30], spread)
             axes.fill_between(
                 kelvin - 273.15,
-                values * (1.0 - wide),
+                # Beyond a half a band is a factor, up and down.
+                values * np.where(wide < 0.5, 1.0 - wide, 1.0 / (1.0 + wide)),
                 values * (1.0 + wide),
                 color=line.get_color(),
                 alpha=0.18,
                 linewidth=0,
             )
         if points and isinstance(item, Liquid):
-            for place, found in enumerate(pure_points(item.key, property)):
-                inside = (found.temperature >= low) & (found.temperature <= high)
+            for place, set_ in enumerate(pure_points(item.key, property)):
+                inside = (set_.temperature >= low) & (set_.temperature <= high)
                 axes.plot(
-                    found.temperature[inside] - 273.15,
-                    display.in_stock(property, found.value[inside]),
+                    set_.temperature[inside] - 273.15,
+                    display.in_stock(property, set_.value[inside]),
                     markers[place % len(markers)],
                     markersize=4,
                     markerfacecolor="none",
                     color=line.get_color(),
-                    label=found.source,
+                    label=set_.source,
                 )
     axes.set_xlabel("temperature [degC]")
     axes.set_ylabel(label(property))
     axes.legend(fontsize="small")
     return axes
+
+
+def _ends(between: Any) -> tuple[float, float]:
+    try:
+        first, second = between
+    except (TypeError, ValueError):
+        raise BadInput(f"between is {between!r}", allowed="a pair of temperatures") from None
+    low = units.single(first, "temperature", "between", plausible=True)
+    high = units.single(second, "temperature", "between", plausible=True)
+    if not low < high:
+        raise BadInput(f"between runs from {low:g} to {high:g} K", allowed="a rising pair")
+    return low, high

@@ -11,7 +11,7 @@ from dropkit import units
 from dropkit.errors import BadInput, MissingProperty
 from dropkit.properties import display
 from dropkit.properties.interface import Fluid
-from dropkit.properties.property_names import PROPERTIES, property_names
+from dropkit.properties.property_words import PROPERTIES, property_names
 from dropkit.properties.pure import liquid
 from dropkit.validity import Outside, check_outside
 

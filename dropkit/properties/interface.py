@@ -18,7 +18,7 @@ from dropkit.errors import (
 )
 from dropkit.properties.curves import CHUNK, Fast, FloatArray
 from dropkit.properties.property_methods import PropertyMethods
-from dropkit.properties.property_names import (
+from dropkit.properties.property_words import (
     GRADED,
     KELVIN_HINT,
     QUOTIENT,

@@ -31,7 +31,7 @@ from dropkit.properties.curves import FloatArray
 from dropkit.properties.interface import Fluid
 from dropkit.properties.mixing.blends import Blend, blend
 from dropkit.properties.mixing.redlich_kister import RULES
-from dropkit.properties.property_names import GRADED, PROPERTIES, QUOTIENT
+from dropkit.properties.property_words import GRADED, PROPERTIES, QUOTIENT
 from dropkit.properties.pure import Liquid
 from dropkit.properties.trails import record_use, relative_uncertainty, versions
 from dropkit.provenance import GRADES, Trail, worst_grade
@@ -122,7 +122,8 @@ class Mixture(Fluid):
             )
         self._composition = composition
         self._estimates = estimates
-        present = [np.any(np.asarray(w) > 0.0) for w in composition.fractions]
+        # An empty array of compositions keeps all its components.
+        present = [np.size(w) == 0 or np.any(np.asarray(w) > 0.0) for w in composition.fractions]
         self._keys = tuple(k for k, here in zip(composition.keys, present, strict=True) if here)
         self._mass = tuple(
             w for w, here in zip(composition.fractions, present, strict=True) if here

@@ -2,10 +2,7 @@
 
 from __future__ import annotations
 
-import math
 from collections.abc import Callable, Mapping, Sequence
-from dataclasses import dataclass
-from itertools import pairwise
 from typing import Any, Final
 
 import numpy as np
@@ -16,7 +13,8 @@ from dropkit.properties import display
 from dropkit.properties.cautions import STATIC_ACCUMULATOR
 from dropkit.properties.curves import FloatArray
 from dropkit.properties.interface import Fluid
-from dropkit.properties.property_names import PROPERTIES, QUOTIENT, property_name
+from dropkit.properties.own_values import OwnCurve, read_values
+from dropkit.properties.property_words import PROPERTIES, QUOTIENT, property_name
 from dropkit.properties.trails import grade_with, versions
 from dropkit.provenance import Trail
 from dropkit.records import PropertyRecord
@@ -24,70 +22,8 @@ from dropkit.validity import Range
 
 __all__ = ["OwnFluid", "fluid", "overlay"]
 
-# A value stated at one temperature serves this far around it.
-AROUND: Final = 0.5  # K
-# Straight lines in ln(y) over 1/T for these, in y over T for the rest.
 # Dynamic viscosity, where the kinematic one is given, is the first times the second.
 PRODUCT: Final = ("kinematic_viscosity", "density")
-_EXPONENTIAL: Final = ("viscosity", "kinematic_viscosity", "vapour_pressure")
-
-
-@dataclass(frozen=True, slots=True)
-class OwnCurve:
-    """Values of one property: a constant, one at a stated temperature, or (T, value) pairs.
-
-    Parameters
-    ----------
-    quantity : str
-        What it gives.
-    temperatures, values : tuple of float
-        Pairs [K, SI]; empty temperatures mean a constant at all temperatures.
-    """
-
-    quantity: str
-    temperatures: tuple[float, ...]
-    values: tuple[float, ...]
-
-    @property
-    def range(self) -> Range:
-        """Where the values hold."""
-        if not self.temperatures:
-            return Range(0.0, math.inf)
-        if len(self.temperatures) == 1:
-            return Range(self.temperatures[0] - AROUND, self.temperatures[0] + AROUND)
-        return Range(self.temperatures[0], self.temperatures[-1])
-
-    @property
-    def method(self) -> str:
-        """The rule in one line."""
-        if not self.temperatures:
-            return "own value, held constant over temperature"
-        if len(self.temperatures) == 1:
-            return f"own value at {self.temperatures[0] - 273.15:g} degC"
-        line = "ln(value) over 1/T" if self.quantity in _EXPONENTIAL else "value over T"
-        return f"own {len(self.values)} values, straight lines in {line}"
-
-    def scalar(self, temperature: float) -> float:
-        """Value [SI] at a temperature [K]."""
-        if len(self.values) == 1:
-            return self.values[0]
-        return float(self.array(np.array([temperature]))[0])
-
-    def array(self, temperature: FloatArray) -> FloatArray:
-        """Values [SI] at temperatures [K]; end segments go on outside."""
-        if len(self.values) == 1:
-            return np.full(temperature.shape, self.values[0])
-        curved = self.quantity in _EXPONENTIAL
-        x = 1.0 / temperature if curved else temperature
-        known = np.array(self.temperatures)
-        place = np.clip(np.searchsorted(known, temperature, side="right") - 1, 0, known.size - 2)
-        nodes = 1.0 / known if curved else known
-        y = np.log(self.values) if curved else np.array(self.values)
-        slope = np.diff(y) / np.diff(nodes)
-        # Far outside, where the user asked for it, a line may overflow; that becomes NaN.
-        with np.errstate(all="ignore"):
-            line = y[place] + slope[place] * (x - nodes[place])
-            return np.exp(line) if curved else line
 
 
 def fluid(
@@ -144,7 +80,7 @@ def fluid(
         raise BadInput(f"The name of a fluid is text, not {name!r}")
     if not values:
         raise BadInput(f"{name} has no values", allowed="at least one of " + ", ".join(PROPERTIES))
-    curves = _read(values, at, plausible)
+    curves = read_values(values, at, plausible)
     if {"viscosity", "kinematic_viscosity"} <= curves.keys():
         raise BadInput(
             f"{name} has both viscosity and kinematic_viscosity",
@@ -164,7 +100,7 @@ def overlay(
     """`base` with some of its properties replaced; see `Fluid.with_values`."""
     if not values:
         raise BadInput("No values to replace", allowed="at least one of " + ", ".join(PROPERTIES))
-    curves = _read(values, at, plausible)
+    curves = read_values(values, at, plausible)
     if {"viscosity", "kinematic_viscosity"} <= curves.keys():
         raise BadInput("viscosity and kinematic_viscosity are both given", allowed="one of the two")
     trends = {}
@@ -410,42 +346,3 @@ def _spread(prop: str, value: Any) -> float:
     if not 0.0 <= number < 1.0:
         raise BadInput(f"The uncertainty of {prop} is {number:g}", allowed="relative, 0 to 1")
     return number
-
-
-def _read(values: Mapping[str, Any], at: Any, plausible: bool) -> dict[str, OwnCurve]:
-    where = None if at is None else units.single(at, "temperature", "at", plausible=plausible)
-    return {
-        property_name(prop): _read_one(prop, value, where, plausible)
-        for prop, value in values.items()
-    }
-
-
-def _read_one(prop: str, value: Any, at: float | None, plausible: bool) -> OwnCurve:
-    pairs = _as_pairs(value)
-    if pairs is None:
-        number = units.single(value, prop, prop, plausible=plausible)
-        return OwnCurve(prop, () if at is None else (at,), (number,))
-    known = sorted(
-        (
-            units.single(t, "temperature", f"temperature of {prop}", plausible=plausible),
-            units.single(y, prop, prop, plausible=plausible),
-        )
-        for t, y in pairs
-    )
-    if not known:
-        raise BadInput(f"{prop} has no pairs", allowed="at least one (temperature, value) pair")
-    for (first, _), (second, _) in pairwise(known):
-        if first == second:
-            raise BadInput(f"{prop} is given twice at {first:g} K", allowed="one value each")
-    return OwnCurve(prop, tuple(t for t, _ in known), tuple(y for _, y in known))
-
-
-def _as_pairs(value: Any) -> list[tuple[Any, Any]] | None:
-    """A list of (temperature, value) pairs, or None where `value` is a single value."""
-    if isinstance(value, np.ndarray) and value.ndim == 2 and value.shape[1] == 2:
-        return [(float(t), float(y)) for t, y in value]
-    if not isinstance(value, list):
-        return None
-    if not all(isinstance(item, list | tuple) and len(item) == 2 for item in value):
-        return None
-    return [(item[0], item[1]) for item in value]

@@ -12,7 +12,7 @@ from dropkit.errors import NotALiquid
 from dropkit.properties.catalogue import resolve
 from dropkit.properties.curves import Curve, FloatArray
 from dropkit.properties.interface import Fluid
-from dropkit.properties.property_names import PROPERTIES
+from dropkit.properties.property_words import PROPERTIES
 from dropkit.properties.trails import record_use, relative_uncertainty, versions
 from dropkit.provenance import Trail, worst_grade
 from dropkit.validity import Range

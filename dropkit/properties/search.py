@@ -15,7 +15,7 @@ from dropkit.properties.composition import Composition, check_basis, to_mass
 from dropkit.properties.curves import FloatArray
 from dropkit.properties.interface import Fluid
 from dropkit.properties.mixtures import Mixture
-from dropkit.properties.property_names import property_name
+from dropkit.properties.property_words import property_name
 
 if TYPE_CHECKING:
     import pandas as pd

@@ -12,7 +12,7 @@ from dropkit.errors import BadInput, MissingProperty
 from dropkit.properties import display
 from dropkit.properties.interface import Fluid
 from dropkit.properties.jsonable import from_plain, frozen, to_plain
-from dropkit.properties.property_names import GRADED, PROPERTIES, property_name
+from dropkit.properties.property_words import GRADED, PROPERTIES, property_name
 from dropkit.provenance import Grade, Trail, worst_grade
 from dropkit.validity import Outside
 

@@ -23,7 +23,7 @@ import dropkit as dk
 from dropkit import records
 from dropkit.properties.composition import to_mass
 from dropkit.properties.points import exclusion
-from dropkit.properties.property_names import GRADED
+from dropkit.properties.property_words import GRADED
 
 PAGE_HEAD = """# How close the records come to published points
 

@@ -34,7 +34,7 @@ from dropkit.properties.engines import (
 )
 from dropkit.properties.engines import handbook_tables as tables
 from dropkit.properties.engines.thermo_adapter import METHODS, handbook_curve
-from dropkit.properties.property_names import PROPERTIES
+from dropkit.properties.property_words import PROPERTIES
 
 METHOD = {(m.quantity, m.method): m for m in METHODS}
 

@@ -34,7 +34,7 @@ from dropkit.properties.engines.coolprop_adapter import coolprop_curve
 from dropkit.properties.engines.engine_types import inside_liquid
 from dropkit.properties.engines.known_faults import ANY, EXCLUDED, LIMITED, WIDER
 from dropkit.properties.engines.thermo_adapter import METHODS, REFUSED, handbook_curve
-from dropkit.properties.property_names import PROPERTIES
+from dropkit.properties.property_words import PROPERTIES
 
 METHOD = {(m.quantity, m.method): m for m in METHODS}
 

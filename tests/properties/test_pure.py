@@ -25,7 +25,7 @@ from dropkit.errors import (
     UnknownName,
     Unphysical,
 )
-from dropkit.properties.property_names import PROPERTIES
+from dropkit.properties.property_words import PROPERTIES
 
 KEYS = list(dk.liquids().query("kind == 'liquid'").index)
 

@@ -18,7 +18,7 @@ from dropkit.properties.engines.coolprop_adapter import (
 from dropkit.properties.engines.engine_types import EngineCurve, check_cas
 from dropkit.properties.engines.known_faults import ANY, LIMITED, WIDER, exclusion_reason
 from dropkit.properties.engines.thermo_adapter import METHODS, REFUSED, handbook_curve
-from dropkit.properties.property_names import PROPERTIES, property_name
+from dropkit.properties.property_words import PROPERTIES, property_name
 from dropkit.validity import Range
 
 __all__ = ["engine_boiling_point", "engine_curve", "engine_curves", "engine_properties"]

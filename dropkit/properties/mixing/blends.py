@@ -17,10 +17,10 @@ from dropkit import records
 from dropkit.errors import CompositionError, EstimateRefused, MissingProperty
 from dropkit.properties.composition import reference_density
 from dropkit.properties.curves import Curve, FloatArray, stepwise
-from dropkit.properties.mixing import electrolytes
 from dropkit.properties.mixing.estimates import estimate_error
 from dropkit.properties.mixing.pair import Pair, share_of
 from dropkit.properties.mixing.redlich_kister import RULES, collapse, reduced_temperature
+from dropkit.properties.mixing.salting import salted
 from dropkit.provenance import GRADES
 from dropkit.records import LiquidRecord, PropertyRecord
 from dropkit.validity import Range
@@ -345,41 +345,9 @@ class Blend:
     ) -> Callable[[float], float]:
         def value(temperature: float) -> float:
             with np.errstate(all="ignore"):
-                return float(self._salted(solvent(temperature), mass, temperature))
+                return float(salted(self, solvent(temperature), mass, temperature))
 
         return value
-
-    def _salted(self, solvent: Any, mass: Sequence[Any], temperature: Any) -> Any:
-        """What the salts make of the solvent's value; floats or arrays."""
-        solute = sum(mass[i] for i in self.solutes)
-        if self.property == "density":
-            specific = (1.0 - solute) / solvent
-            for i, block in zip(self.solutes, self.salts, strict=True):
-                specific = specific + mass[i] / electrolytes.apparent_density(
-                    block.parameters, solute, temperature
-                )
-            return 1.0 / specific
-        if self.property == "viscosity":
-            logarithm = (1.0 - solute) * np.log(solvent)
-            for i, block in zip(self.solutes, self.salts, strict=True):
-                salt = electrolytes.apparent_viscosity(block.parameters, solute, temperature)
-                logarithm = logarithm + mass[i] * np.log(salt)
-            return np.exp(logarithm)
-        water = self.records.index(next(e for e in self.records if e.key == "water"))
-        end = self.curves[water]
-        pure: Any
-        if isinstance(temperature, np.ndarray):
-            pure = np.empty(temperature.shape)
-            end.fill(temperature, pure)
-        else:
-            pure = end.scalar(temperature)
-        moles = [mass[i] / records.liquid_record(key).molar_mass for i, key in enumerate(self.keys)]
-        total = sum(moles)
-        for i, block in zip(self.solutes, self.salts, strict=True):
-            solvent = solvent * electrolytes.surface_tension_ratio(
-                block.parameters, moles[i] / total, pure, temperature
-            )
-        return solvent
 
     # ------------------------------------------------ arrays
     def fill(self, mass: Sequence[Any], temperature: FloatArray, out: FloatArray) -> None:
@@ -397,7 +365,7 @@ class Blend:
             shaped = [_forward(self.transform, end) for end in ends]
             self._sum(fractions, shaped, self.pairs, mass, temperature, reduced, out)
         if self.salts:
-            out[:] = self._salted(out, mass, temperature)
+            out[:] = salted(self, out, mass, temperature)
         for pair in self.caps:
             i, j = pair.first, pair.second
             share = share_of(fractions[i], fractions[j])
