@@ -116,8 +116,8 @@ def main(folder: str | Path = ".") -> dict[str, float]:
         "as set": base,
         "5 K colder": stream(GLYCEROL, TEMPERATURE - 5.0, flow),
         "5 K warmer": stream(GLYCEROL, TEMPERATURE + 5.0, flow),
-        "2 % less glycerol": stream(GLYCEROL - 0.02, TEMPERATURE, flow),
-        "2 % more glycerol": stream(GLYCEROL + 0.02, TEMPERATURE, flow),
+        "28 % glycerol": stream(GLYCEROL - 0.02, TEMPERATURE, flow),
+        "32 % glycerol": stream(GLYCEROL + 0.02, TEMPERATURE, flow),
     }
     shown = {
         "viscosity [mPa*s]": ("viscosity", 1e3),
@@ -151,11 +151,13 @@ def main(folder: str | Path = ".") -> dict[str, float]:
     print(f"{1e9 * flow / WANTED_RATE:.4g} uL each; wavelength {wave / NOZZLE:.2f} jet")
     print(f"diameters, growing at {100 * share:.0f} % of the fastest.")
 
-    print("\nKnow before use")
+    air = dk.air(TEMPERATURE)
+    gas_weber = dk.numbers.gas_weber(base["surface_tension"], base["velocity"], NOZZLE, air.density)
+    print("\nKnow before use, besides the cautions of the liquid above")
     for text in (
-        *state.cautions,
         "the breakup length is that of a jet left to itself; a drive shortens it",
-        "the jet is taken as wide as the hole: true of short nozzles only",
+        "the jet is taken as wide as the hole; jets contract or swell by up to a fifth: measure it",
+        f"gas Weber number {gas_weber:.2g}: the breakup length holds below about 0.4 to 1.2",
         "a line under pressure: follow the maker's limits, local codes and licensed practice",
     ):
         print(textwrap.fill(text, 98, initial_indent="- ", subsequent_indent="  "))
@@ -163,7 +165,7 @@ def main(folder: str | Path = ".") -> dict[str, float]:
     table.to_csv(folder / "drop_stream.csv", index_label="quantity")
     picture(folder / "drop_stream.png", cases)
     print("\nSaved drop_stream.csv and drop_stream.png")
-    return {**base, "flow": flow, "drop": drop, "growth_share": share}
+    return {**base, "flow": flow, "drop": drop, "growth_share": share, "gas_weber": gas_weber}
 
 
 if __name__ == "__main__":

@@ -235,7 +235,11 @@ def special_table(points: pd.DataFrame, pure: pd.DataFrame) -> pd.DataFrame:
     glycerol, ethanol = "glycerol + water", "ethanol + water"
     segur = pick(glycerol, "viscosity", "SegurOberstar1951")
     ends = pure[(pure["property"] == "viscosity") & pure["file"].str.endswith("SegurOberstar1951")]
-    every = pd.concat([segur.off, ends.off]).abs()
+    # Their column for water, 0 to 40 degC by tens, as both reprints have it.
+    kelvin = np.array([273.15, 283.15, 293.15, 303.15, 313.15])
+    water = np.array([1.792e-3, 1.308e-3, 1.005e-3, 0.8007e-3, 0.656e-3])
+    wet = pd.Series(100 * (dk.liquid("water").viscosity(kelvin) / water - 1))
+    every = pd.concat([segur.off, ends.off, wet]).abs()
     line(f"glycerol viscosity, Segur & Oberstar ({len(every)} points)", every.max(), 2.5)
     bosart = pick(glycerol, "density", "BosartSnoddy1927")
     line(f"glycerol density, Bosart & Snoddy ({len(bosart)})", bosart.off.abs().max(), 0.06)
@@ -323,8 +327,12 @@ def markdown(table: pd.DataFrame) -> str:
     """A table in Markdown."""
     head = "| " + " | ".join(map(str, table.columns)) + " |"
     rule = "|" + " --- |" * len(table.columns)
-    body = ["| " + " | ".join(str(x) for x in row) + " |" for row in table.itertuples(index=False)]
+    body = ["| " + " | ".join(map(_cell, row)) + " |" for row in table.itertuples(index=False)]
     return "\n".join([head, rule, *body])
+
+
+def _cell(value: Any) -> str:
+    return f"{value:.3g}" if isinstance(value, float) and abs(value) < 0.01 else str(value)
 
 
 if __name__ == "__main__":
