@@ -17,12 +17,16 @@ import sys
 from collections import defaultdict
 from collections.abc import Iterable, Iterator
 from dataclasses import dataclass, field
+from itertools import pairwise
 from pathlib import Path
 from statistics import median
-from typing import Any
+from typing import Any, TypeAlias
 
 import numpy as np
+from record_builder.statistics import round_up
 from record_builder.toml_out import dumps
+
+from dropkit.properties.mixing.estimates import share_factor
 
 TARGET = Path(__file__).resolve().parents[1] / "mixtures-estimates.toml"
 PROPERTIES = {
@@ -61,7 +65,12 @@ PASSED_OVER = {"propylene_glycol_water_khattab_2017", "interfacial_tension_water
 # Evaluated handbook equations and saturation tables: not the measured ends that are wanted.
 EQUATIONS = ("handbooks", "correlations", "vdi", "formulations", "permittivity", "conductivity")
 INSIDE = (0.02, 0.98)  # mass fractions: at the ends any rule is right
+# Edges of the smaller fraction of a pair, on the rule's basis, for coverage by share.
+SHARES = (0.0, 0.05, 0.1, 0.2, 0.35, 0.51)
 NEAR = 12.0  # K between two pure values that may be interpolated
+
+
+Error: TypeAlias = "tuple[float, float]"
 
 
 @dataclass(frozen=True)
@@ -306,8 +315,8 @@ def own_ends(rows: Iterable[Row]) -> dict[tuple[str, str, str, float], float]:
 
 def errors(
     rows: list[Row], pures: Pures
-) -> tuple[dict[str, dict[str, dict[str, list[float]]]], dict[str, set[str]], int]:
-    """Errors by property, water or not, and pair; files used; rows passed over.
+) -> tuple[dict[str, dict[str, dict[str, list[Error]]]], dict[str, set[str]], int]:
+    """Errors with the smaller share, by property, water or not, and pair; files; rows passed over.
 
     An error is counted as the estimate's band is: (measured - estimate) / estimate.
     """
@@ -315,7 +324,7 @@ def errors(
     for (_, name, prop, temperature), value in own.items():
         if name != "water":
             pures.add(name, prop, temperature, value)
-    found: dict[str, dict[str, dict[str, list[float]]]] = defaultdict(
+    found: dict[str, dict[str, dict[str, list[Error]]]] = defaultdict(
         lambda: defaultdict(lambda: defaultdict(list))
     )
     files: dict[str, set[str]] = defaultdict(set)
@@ -346,14 +355,19 @@ def errors(
             (float(densities[0] or 0), float(densities[1] or 0)),
         )
         group = "with_water" if watery else "without_water"
-        found[row.property][group][" + ".join(sorted(names))].append(row.value / guess - 1.0)
+        share = w
+        if row.property != "density":
+            first = w / float(densities[0] or 0)
+            share = first / (first + (1.0 - w) / float(densities[1] or 0))
+        error = (row.value / guess - 1.0, min(share, 1.0 - share))
+        found[row.property][group][" + ".join(sorted(names))].append(error)
         files[row.property].add(row.file)
     return found, files, passed
 
 
-def figures(pairs: dict[str, list[float]]) -> dict[str, Any]:
+def figures(pairs: dict[str, list[Error]]) -> dict[str, Any]:
     """The error over all points, and with every pair counting the same; the larger is used."""
-    points = np.concatenate([np.array(values) for values in pairs.values()])
+    points, shares_of = np.concatenate([np.array(values) for values in pairs.values()]).T
     weights = np.concatenate([np.full(len(v), 1.0 / len(v)) for v in pairs.values()])
     rms = float(np.sqrt(np.mean(points**2)))
     rms_pairs = float(np.sqrt(np.average(points**2, weights=weights)))
@@ -361,12 +375,24 @@ def figures(pairs: dict[str, list[float]]) -> dict[str, Any]:
     order = np.argsort(np.abs(points))
     shares = np.cumsum(weights[order]) / weights.sum()
     band_pairs = float(np.abs(points)[order][np.searchsorted(shares, 0.9)])
-    # k = 1: the rms error, or what makes twice it cover 90 % of the hidden points.
-    uncertainty = max(rms, rms_pairs, band / 2, band_pairs / 2)
-    uncertainty = float(f"{uncertainty * 1.005:.3g}")
-    covered = float(np.mean(np.abs(points) <= 2 * uncertainty))
-    if covered < 0.9:
-        raise SystemExit(f"band covers only {covered:.0%}")
+    # k = 1: the rms error, or what makes twice it, by the share of the two, cover 90 % of the
+    # hidden points in every stretch of shares.
+    factor = share_factor(shares_of, 1.0 - shares_of)
+    stretches = {}
+    for low, high in pairwise(SHARES):
+        here = (shares_of >= low) & (shares_of < high)
+        if here.sum() >= 10:
+            stretches[f"{low:g} to {min(high, 0.5):g}"] = here
+    scaled = np.abs(points) / factor
+    groups = [scaled, *(scaled[here] for here in stretches.values())]
+    needed = [np.quantile(group, 0.9, method="higher") for group in groups]
+    halves = [0.5 * float(value) for value in (band, band_pairs, *needed)]
+    uncertainty = round_up(max(rms, rms_pairs, *halves) * (1.0 + 1e-9), 3)
+    inside = np.abs(points) <= 2 * uncertainty * factor
+    covered = float(np.mean(inside))
+    by_share = {name: float(f"{np.mean(inside[here]):.3g}") for name, here in stretches.items()}
+    if min([covered, *by_share.values()]) < 0.9:
+        raise SystemExit(f"band covers only {min([covered, *by_share.values()]):.0%}")
     return {
         "uncertainty": uncertainty,
         "rms": float(f"{rms:.3g}"),
@@ -376,6 +402,7 @@ def figures(pairs: dict[str, list[float]]) -> dict[str, Any]:
         "bias": float(f"{points.mean():.3g}"),
         "worst": float(f"{np.abs(points).max():.3g}"),
         "covered": float(f"{covered:.3g}"),
+        "covered_by_share": by_share,
         "pairs": len(pairs),
         "points": len(points),
     }
@@ -410,7 +437,7 @@ def main(folder: Path, target: Path = TARGET) -> dict[str, Any]:
         for group in ("with_water", "without_water"):
             print(prop, group, {k: v for k, v in result[prop][group].items() if k != "note"})
             for pair, values in sorted(found[prop].get(group, {}).items()):
-                a = np.array(values)
+                a = np.array(values)[:, 0]
                 print(f"    {pair}: {len(a)} points, rms {np.sqrt(np.mean(a**2)):.4f}")
     print(f"passed over: {passed}")
     return result

@@ -30,6 +30,7 @@ from dropkit.properties.composition import (
 from dropkit.properties.curves import FloatArray
 from dropkit.properties.interface import Fluid
 from dropkit.properties.mixing.blends import Blend, blend
+from dropkit.properties.mixing.miscibility import check_mixable
 from dropkit.properties.mixing.redlich_kister import RULES
 from dropkit.properties.property_words import GRADED, PROPERTIES, QUOTIENT
 from dropkit.properties.pure import Liquid
@@ -39,8 +40,6 @@ from dropkit.validity import Range, settle
 
 __all__ = ["Mixture", "mixture"]
 
-# Water dissolves less than 0.1 % of these, and they of it (common practice).
-HYDROCARBONS: Final = frozenset({"alkane", "aromatic"})
 ESTIMATES: Final = ("warn", "allow", "refuse")
 
 
@@ -129,25 +128,7 @@ class Mixture(Fluid):
             w for w, here in zip(composition.fractions, present, strict=True) if here
         )
         entries = [records.liquid_record(key) for key in self._keys]
-        if all(entry.kind != "liquid" for entry in entries):
-            raise NotALiquid(
-                f"{', '.join(entry.name for entry in entries)}: a mixture needs a liquid",
-                hint="Add the solvent, such as 'water': 'rest'",
-            )
-        metals = {entry.family == "metal" for entry in entries}
-        if len(metals) > 1:
-            raise CompositionError(
-                f"{', '.join(entry.name for entry in entries)}: a molten metal does not mix with "
-                "other liquids",
-                hint="Ask for each by itself",
-            )
-        wet = {"water" if entry.key == "water" else entry.family for entry in entries}
-        if "water" in wet and len(wet) > 1 and wet - {"water"} <= HYDROCARBONS:
-            raise CompositionError(
-                f"{', '.join(entry.name for entry in entries)}: water and hydrocarbons do not mix "
-                "but form two liquids",
-                hint="Ask for each by itself",
-            )
+        check_mixable(entries)
         self._pure = Liquid(entries[0]) if len(entries) == 1 else None
         self.name = self._title(entries)
         self._blends: dict[str, Blend | MissingProperty] = {}
@@ -182,7 +163,7 @@ class Mixture(Fluid):
             if isinstance(found, EstimateRefused):
                 refused.append(prop)
             elif isinstance(found, Blend) and found.estimated:
-                share = f"{prop} (+-{200 * found.estimate_error:.2g} %)"
+                share = f"{prop} (+-{200 * found.estimate_error(self._mass):.2g} %)"
                 estimated.append(share)
         if not (estimated or refused):
             return
@@ -388,8 +369,8 @@ class Mixture(Fluid):
         ]
         if rule.solutes and len(rule.solvents) > 1:
             assumptions.append(
-                "the salt acts on the mixed solvent as it does on water; the error quoted is that "
-                "of aqueous pairs without a record"
+                "the salt acts on the mixed solvent as it does on water; its whole effect counts as "
+                "uncertain"
             )
         cautions = [text for block in used for text in block.cautions]
         if prop == "viscosity":
@@ -419,7 +400,9 @@ class Mixture(Fluid):
         ends = 0.0
         for share, curve in zip(shares, rule.curves, strict=True):
             ends += share * max(known.pop(id(block), 0.0) for block in curve.records)
-        return float(np.hypot(max(ends, *known.values(), 0.0), rule.estimate_error))
+        return float(
+            np.hypot(max(ends, *known.values(), 0.0), rule.estimate_error(self._mass, temperature))
+        )
 
     # ------------------------------------------------ display
     def __repr__(self) -> str:

@@ -5,6 +5,7 @@ from __future__ import annotations
 import csv
 import sys
 import tomllib
+from itertools import pairwise
 from pathlib import Path
 from typing import Any
 
@@ -644,12 +645,21 @@ def test_estimate_rules_are_exact_for_ideal_mixtures() -> None:
     assert estimate_error.estimate("density", w, densities, densities) == pytest.approx(900.0)
 
 
-@given(st.lists(st.lists(st.floats(-0.5, 0.5), min_size=1, max_size=30), min_size=1, max_size=6))
-def test_estimate_band_covers_nine_in_ten(pairs: list[list[float]]) -> None:
+hidden = st.lists(st.tuples(st.floats(-0.5, 0.5), st.floats(0.02, 0.5)), min_size=1, max_size=40)
+
+
+@given(st.lists(hidden, min_size=1, max_size=6))
+def test_estimate_band_covers_nine_in_ten(pairs: list[list[tuple[float, float]]]) -> None:
     found = estimate_error.figures({str(i): values for i, values in enumerate(pairs)})
-    points = np.abs(np.concatenate([np.array(values) for values in pairs]))
-    assert np.mean(points <= 2 * found["uncertainty"] + 1e-12) >= 0.9
+    points, shares = np.concatenate([np.array(values) for values in pairs]).T
+    band = 2 * found["uncertainty"] * (4 * shares * (1 - shares)) ** (1 / 3)
+    assert np.mean(np.abs(points) <= band + 1e-12) >= 0.9
     assert found["points"] == len(points)
+    # and in each stretch of shares that holds ten points or more
+    for low, high in pairwise(estimate_error.SHARES):
+        here = (shares >= low) & (shares < high)
+        if here.sum() >= 10:
+            assert np.mean(np.abs(points)[here] <= band[here] + 1e-12) >= 0.9
 
 
 def test_stored_estimates_cover_nine_in_ten() -> None:
@@ -660,3 +670,4 @@ def test_stored_estimates_cover_nine_in_ten() -> None:
             assert figures["covered"] >= 0.9
             assert 2 * figures["uncertainty"] >= figures["band_90"]
             assert figures["uncertainty"] >= figures["rms"]
+            assert all(share >= 0.9 for share in figures["covered_by_share"].values())

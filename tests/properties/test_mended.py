@@ -223,6 +223,16 @@ def test_three_components_by_hand():
     assert abs(ratio - (x - y)) > 0.02
 
 
+def test_a_pinch_does_not_spoil_a_known_mixture():
+    known = quiet({"glycerol": 0.38, "water": "rest"})
+    pinch = quiet({"glycerol": 0.38, "NaCl": 0.001, "water": "rest"})
+    assert pinch.uncertainty("viscosity", 293.15) < 1.1 * known.uncertainty("viscosity", 293.15)
+    drop = quiet({"glycerol": 0.38, "ethanol": 1e-3, "water": "rest"})
+    half = quiet({"glycerol": 0.38, "ethanol": 0.31, "water": "rest"})
+    assert drop.uncertainty("viscosity") < 0.3 * half.uncertainty("viscosity")
+    assert drop.grade("viscosity") == "estimated"
+
+
 def test_uncertainty_of_a_mixture_by_hand():
     mix = quiet({"glycerol": 0.4, "water": "rest"})
     blocks = dk.records.pair_record("glycerol", "water").properties

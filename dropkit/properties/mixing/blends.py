@@ -17,7 +17,7 @@ from dropkit import records
 from dropkit.errors import CompositionError, EstimateRefused, MissingProperty
 from dropkit.properties.composition import reference_density
 from dropkit.properties.curves import Curve, FloatArray, stepwise
-from dropkit.properties.mixing.estimates import estimate_error
+from dropkit.properties.mixing.estimates import estimate_error, share_factor
 from dropkit.properties.mixing.pair import Pair, share_of
 from dropkit.properties.mixing.redlich_kister import RULES, collapse, reduced_temperature
 from dropkit.properties.mixing.salting import salted
@@ -236,16 +236,37 @@ class Blend:
             codes = np.maximum(codes, GRADES.index(block.grade))
         return codes
 
-    @property
-    def estimate_error(self) -> float:
-        """Relative standard uncertainty that an estimate adds; 0 without one."""
-        if not self.estimated:
-            return 0.0
-        watery = any(
-            "water" in (self.records[i].key, self.records[j].key) for i, j in self.unfitted
-        )
-        watery = watery or bool(self.solutes)
-        return estimate_error(self.property, with_water=watery)
+    def estimate_error(self, mass: Sequence[Any], temperature: Any = None) -> float:
+        """Relative standard uncertainty that an estimate adds at its worst point; 0 without one.
+
+        That of hidden pairs, by the share of the two; for salts in a mixed solvent, of which
+        no hidden pair is known, the whole of their effect.
+        """
+        shares = self.fractions(mass)
+        found = [0.0]
+        for i, j in self.unfitted:
+            watery = "water" in (self.records[i].key, self.records[j].key)
+            share = float(np.max(share_factor(shares[i], shares[j])))
+            found.append(share * estimate_error(self.property, with_water=watery))
+        if self.solutes and len(self.solvents) > 1:
+            found.append(self._salt_effect(mass, temperature))
+        return max(found)
+
+    def _salt_effect(self, mass: Sequence[Any], temperature: Any) -> float:
+        """Largest change, as a logarithm, that the salts make to the solvent's value."""
+        limits = self.range(mass)
+        kelvin = 0.5 * (limits.low + limits.high) if temperature is None else temperature
+        shape = np.broadcast_shapes(np.shape(kelvin), *(np.shape(w) for w in mass))
+        flat = np.broadcast_to(kelvin, shape).reshape(-1).astype(float)
+        wide = [np.broadcast_to(w, shape).reshape(-1) for w in mass]
+        bare = blend(self.property, tuple(self.keys[i] for i in self.solvents))
+        with_salts, without = np.empty(flat.size), np.empty(flat.size)
+        with np.errstate(all="ignore"):
+            self.fill(wide, flat, with_salts)
+            total = sum(wide[i] for i in self.solvents)
+            bare.fill([wide[i] / total for i in self.solvents], flat, without)
+            change = np.abs(np.log(with_salts / without))
+        return float(np.nanmax(change)) if np.isfinite(change).any() else 1.0
 
     @property
     def method(self) -> str:
