@@ -150,12 +150,35 @@ class Trail:
         return "; ".join(dict.fromkeys(record.range for record in self.records))
 
     def to_dict(self) -> dict[str, Any]:
-        """A dict of plain types that survives JSON."""
+        """A dict of plain types that survives JSON.
+
+        Returns
+        -------
+        dict
+            One entry per field.
+
+        Examples
+        --------
+        >>> trail = Trail("density", "water", "polynomial", "measured", 0.001)
+        >>> Trail.from_dict(trail.to_dict()) == trail
+        True
+        """
         return asdict(self)
 
     @classmethod
     def from_dict(cls, data: dict[str, Any]) -> Trail:
-        """Rebuild a trail from `to_dict`, also after a passage through JSON."""
+        """Rebuild a trail from `to_dict`, also after a passage through JSON.
+
+        Parameters
+        ----------
+        data : dict
+            What `to_dict` gave.
+
+        Returns
+        -------
+        Trail
+            Equal to the one that was written.
+        """
         records = tuple(
             RecordUse(**{**record, "sources": tuple(record["sources"])})
             for record in data["records"]

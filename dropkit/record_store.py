@@ -157,9 +157,9 @@ class Store:
                     self._liquids[key] = found
         return found
 
-    def pair(self, a: str, b: str) -> PairRecord | None:
+    def pair(self, first: str, second: str) -> PairRecord | None:
         """The record of a pair in any order, None where there is none."""
-        pair = (a, b) if a < b else (b, a)
+        pair = (first, second) if first < second else (second, first)
         try:
             return self._pairs[pair]
         except KeyError:

@@ -138,12 +138,12 @@ def liquid_record(key: str) -> LiquidRecord:
     return _store().liquid(key)
 
 
-def pair_record(a: str, b: str) -> PairRecord | None:
+def pair_record(first: str, second: str) -> PairRecord | None:
     """All that the data hold on a pair.
 
     Parameters
     ----------
-    a, b : str
+    first, second : str
         Keys of the components, in any order.
 
     Returns
@@ -161,7 +161,7 @@ def pair_record(a: str, b: str) -> PairRecord | None:
     >>> pair_record("water", "glycerol").components
     ('glycerol', 'water')
     """
-    return _store().pair(a, b)
+    return _store().pair(first, second)
 
 
 def source(key: str) -> Source:

@@ -63,12 +63,44 @@ class Range:
             raise BadInput(f"range of {self.what} runs from {self.low} to {self.high}")
 
     def holds(self, value: Any) -> Any:
-        """True where `value` (float or array, SI) lies inside; NaN counts as inside."""
+        """Where some values lie inside; NaN counts as inside.
+
+        Parameters
+        ----------
+        value : float or ndarray
+            Values, in SI.
+
+        Returns
+        -------
+        bool or ndarray of bool
+            In the shape of the values.
+
+        Examples
+        --------
+        >>> Range(273.15, 373.15).holds(300.0)
+        True
+        """
         outside = (value < self.low) | (value > self.high)
         return ~outside if isinstance(outside, np.ndarray) else not outside
 
     def covers(self, values: Any) -> bool:
-        """Whether all of some values (float or array, SI) lie inside; False where one is NaN."""
+        """Whether all of some values lie inside.
+
+        Parameters
+        ----------
+        values : float or ndarray
+            Values, in SI.
+
+        Returns
+        -------
+        bool
+            False where one is NaN, or where there is none.
+
+        Examples
+        --------
+        >>> Range(273.15, 373.15).covers(np.array([300.0, 400.0]))
+        False
+        """
         if isinstance(values, np.ndarray):
             return bool(values.size and self.low <= values.min() and values.max() <= self.high)
         return bool(self.low <= values <= self.high)

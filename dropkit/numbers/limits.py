@@ -54,7 +54,18 @@ class Limit:
     note: str = ""
 
     def side(self, value: float) -> str:
-        """What the trade says at `value`; ``"unknown"`` for NaN."""
+        """What the trade says at a value.
+
+        Parameters
+        ----------
+        value : float
+            A value of the number, in SI.
+
+        Returns
+        -------
+        str
+            One of `sides`; ``"unknown"`` for NaN.
+        """
         return "unknown" if value != value else self.sides[bisect_right(self.bounds, value)]
 
     def __str__(self) -> str:

@@ -70,7 +70,13 @@ class NumberRow:
         return next((size for size in ("diameter", "radius") if size in words), "")
 
     def said(self) -> tuple[str, ...]:
-        """For each limit, on which side the value lies, where the limit stands and its source."""
+        """For each limit, on which side the value lies, where the limit stands and its source.
+
+        Returns
+        -------
+        tuple of str
+            One text for each of `limits`; arrays are counted.
+        """
         return tuple(f"{_sides(limit, self.value)} [{limit}]" for limit in self.limits)
 
 
@@ -147,11 +153,37 @@ class NumbersSheet:
         return len(self.rows)
 
     def si(self) -> NumbersSheet:
-        """The same sheet giving SI floats and arrays."""
+        """The same sheet giving SI floats and arrays.
+
+        Returns
+        -------
+        NumbersSheet
+            With the same rows.
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> sheet = dk.liquid("water").at("20 degC").numbers("50 um")
+        >>> round(sheet.si()["capillary_length"], 6)
+        0.002726
+        """
         return self._turned(None)
 
     def with_units(self) -> NumbersSheet:
-        """The same sheet giving Quantities for lengths, times and speeds."""
+        """The same sheet giving Quantities for lengths, times and speeds.
+
+        Returns
+        -------
+        NumbersSheet
+            With the same rows.
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> sheet = dk.liquid("water").at(293.15).numbers(50e-6).with_units()
+        >>> print(f"{sheet['capillary_length']:.3f}")
+        2.726 millimeter
+        """
         return self._turned(self._asked or units.Asked())
 
     def _turned(self, asked: units.Asked | None) -> NumbersSheet:
@@ -181,6 +213,13 @@ class NumbersSheet:
         -------
         pandas.DataFrame
             Symbol, fluid, value, unit, what it compares, the length scale, and the limits.
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> sheet = dk.liquid("water").at("20 degC").numbers("50 um", "6 m/s")
+        >>> print(f"{sheet.table().loc['weber', 'value']:.1f}")
+        24.7
         """
         import pandas as pd
 
@@ -200,7 +239,20 @@ class NumbersSheet:
         return frame
 
     def to_dict(self) -> dict[str, Any]:
-        """A dict of plain types that survives JSON; `from_dict` rebuilds the sheet."""
+        """A dict of plain types that survives JSON; `from_dict` rebuilds the sheet.
+
+        Returns
+        -------
+        dict
+            Rows [SI], trails, and what was not formed.
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> sheet = dk.liquid("water").at("20 degC").numbers("50 um", "6 m/s")
+        >>> type(sheet).from_dict(sheet.to_dict())["weber"] == sheet["weber"]
+        True
+        """
         return {
             "kind": "NumbersSheet",
             "subject": self.subject,
@@ -215,7 +267,23 @@ class NumbersSheet:
 
     @classmethod
     def from_dict(cls, data: dict[str, Any]) -> NumbersSheet:
-        """Rebuild a sheet from `to_dict`, also after a passage through JSON."""
+        """Rebuild a sheet from `to_dict`, also after a passage through JSON.
+
+        Parameters
+        ----------
+        data : dict
+            What `to_dict` gave.
+
+        Returns
+        -------
+        NumbersSheet
+            In SI or with units, as it was.
+
+        Raises
+        ------
+        BadInput
+            The dict of something else.
+        """
         if not isinstance(data, dict) or data.get("kind") != "NumbersSheet":
             raise BadInput(
                 "this is no dict of a NumbersSheet", allowed="what NumbersSheet.to_dict() gave"

@@ -27,7 +27,15 @@ CHUNK = 16_384
 
 
 class Fast(NamedTuple):
-    """What a scalar look-up needs and no more."""
+    """What a scalar look-up needs and no more.
+
+    Parameters
+    ----------
+    low, high : float
+        Ends of the range [K].
+    value : callable
+        The property [SI] at a temperature [K] between them.
+    """
 
     low: float
     high: float
@@ -73,7 +81,18 @@ class Curve:
         return Fast(self.range.low, self.range.high, self.scalar)
 
     def serving(self, temperature: float) -> int:
-        """Index of the record that serves a temperature [K]; the nearest one outside all ranges."""
+        """Which record serves a temperature.
+
+        Parameters
+        ----------
+        temperature : float
+            Temperature [K].
+
+        Returns
+        -------
+        int
+            Place in `records`; outside all ranges that of the nearest.
+        """
         for number, limits in enumerate(self.ranges):
             if limits.low <= temperature <= limits.high:
                 return number
@@ -81,7 +100,18 @@ class Curve:
         return gaps.index(min(gaps))
 
     def serve(self, temperature: FloatArray) -> np.ndarray[Any, np.dtype[np.intp]]:
-        """Index of the record that serves each of some temperatures [K]."""
+        """Which record serves each of some temperatures.
+
+        Parameters
+        ----------
+        temperature : ndarray
+            Temperatures [K].
+
+        Returns
+        -------
+        ndarray of int
+            Places in `records`.
+        """
         # Between two neighbouring ends one record serves throughout.
         place = np.searchsorted(self._ends, temperature)
         number: np.ndarray[Any, np.dtype[np.intp]] = self._between[place]
@@ -90,7 +120,15 @@ class Curve:
         return number
 
     def fill(self, temperature: FloatArray, out: FloatArray) -> None:
-        """Write the property at `temperature` [K], a flat float array, into `out` in place."""
+        """Write the property into an array in place.
+
+        Parameters
+        ----------
+        temperature : ndarray
+            Temperatures [K], flat.
+        out : ndarray
+            What takes the values [SI], of the same size.
+        """
         if len(self.ranges) == 1:
             self._arrays[0](temperature, out)
             return

@@ -2,63 +2,28 @@
 
 from __future__ import annotations
 
-import warnings
-from collections.abc import Callable
-from typing import TYPE_CHECKING, Any, Final, NamedTuple
+from typing import TYPE_CHECKING, Any
 
 import numpy as np
 
 from dropkit import units
-from dropkit.errors import (
-    BadInput,
-    DropkitError,
-    DropkitWarning,
-    MissingProperty,
-    UnknownName,
-    nearest,
-)
-from dropkit.properties import display, humid_air
+from dropkit.errors import BadInput, DropkitError, UnknownName, nearest
+from dropkit.properties import display
 from dropkit.properties.gas_statements import STATEMENTS, gas_trail
+from dropkit.properties.gas_values import Point, gas_value
 from dropkit.properties.jsonable import from_plain, frozen, to_plain
-from dropkit.provenance import Grade, Trail, worst_grade
+from dropkit.properties.traced import Traced
+from dropkit.provenance import Trail
 from dropkit.unit_table import KINDS
-from dropkit.validity import Outside, Range, settle
+from dropkit.validity import Outside
 
 if TYPE_CHECKING:
     import pandas as pd
 
 __all__ = ["Air"]
 
-DIFFUSING: Final = Range(273.15, 373.15)
 
-
-class _Point(NamedTuple):
-    """The state in SI, and how to compute from it."""
-
-    temperature: Any
-    pressure: Any
-    x: Any
-
-
-_COMPUTE: Final[dict[str, Callable[[_Point], Any]]] = {
-    "density": lambda at: humid_air.gas_density(*at),
-    "viscosity": lambda at: humid_air.gas_viscosity(*at),
-    "kinematic_viscosity": lambda at: humid_air.gas_viscosity(*at) / humid_air.gas_density(*at),
-    "thermal_conductivity": lambda at: humid_air.gas_thermal_conductivity(*at),
-    "heat_capacity": lambda at: humid_air.gas_heat_capacity(*at),
-    "vapour_diffusivity": lambda at: humid_air.water_diffusivity(at.temperature, at.pressure),
-    "mean_free_path": lambda at: humid_air.gas_mean_free_path(*at),
-    "molar_mass": lambda at: (1.0 - at.x) * humid_air.DRY_AIR + at.x * humid_air.WATER,
-    "saturation_vapour_pressure": lambda at: humid_air.saturation_pressure(at.temperature),
-    "water_mole_fraction": lambda at: at.x,
-    "vapour_pressure": lambda at: at.x * at.pressure,
-    "dew_point": lambda at: humid_air.dew_point(at.x * at.pressure, at.pressure),
-}
-# Zero is an answer of these, not a failure.
-_MAY_VANISH: Final = frozenset({"water_mole_fraction", "vapour_pressure"})
-
-
-class Air:
+class Air(Traced):
     """Air at one condition or an array of conditions; made by `air`.
 
     Immutable. Each property is an attribute, computed on first access and then kept. Asked for
@@ -95,14 +60,14 @@ class Air:
     _humidity: Any
     _index: Any
     _outside: Outside
-    _point: _Point
+    _point: Point
     _values: dict[str, Any]
 
     def __init__(
         self, point: Any, humidity: Any, asked: Any, outside: Outside, index: Any = None
     ) -> None:
         for slot, value in (
-            ("_point", _Point(*map(frozen, point))),
+            ("_point", Point(*map(frozen, point))),
             ("_humidity", frozen(humidity)),
             ("_asked", asked),
             ("_outside", outside),
@@ -119,11 +84,35 @@ class Air:
 
     # ------------------------------------------------ how it was asked
     def si(self) -> Air:
-        """The same air giving SI floats and arrays."""
+        """The same air giving SI floats and arrays.
+
+        Returns
+        -------
+        Air
+            What was computed is shared.
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> round(dk.air("20 degC").si().density, 3)
+        1.205
+        """
         return self._turned(None)
 
     def with_units(self) -> Air:
-        """The same air giving Quantities."""
+        """The same air giving Quantities.
+
+        Returns
+        -------
+        Air
+            What was computed is shared.
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> print(f"{dk.air(293.15).with_units().density:.3f}")
+        1.205 kilogram / meter ** 3
+        """
         return self._turned(self._asked or units.Asked())
 
     def _turned(self, asked: Any) -> Air:
@@ -144,38 +133,11 @@ class Air:
     # ------------------------------------------------ values
     def _si(self, prop: str) -> Any:
         if prop not in self._values:
-            value = self._compute(prop)
+            value = gas_value(prop, self._point, self._outside)
             if isinstance(value, np.ndarray):
                 value.flags.writeable = False
             self._values[prop] = value
         return self._values[prop]
-
-    def _compute(self, prop: str) -> Any:
-        at, scalar = self._point, not isinstance(self._point.temperature, np.ndarray)
-        known: Any = np.isfinite(at.x)
-        mask: Any = False
-        if prop == "vapour_diffusivity":
-            mask = settle(f"air: {prop}", at.temperature, DIFFUSING, self._outside, stacklevel=5)
-        if prop == "dew_point":
-            known = known & np.greater(at.x, 0.0)
-            if scalar and at.x == 0.0:
-                raise MissingProperty(
-                    "dry air has no dew point", hint="Give a humidity above zero to dropkit.air"
-                )
-        # Numpy's own numbers: Python's floats would raise where these give infinity.
-        exact = _Point(*(np.asarray(value)[()] for value in at))
-        with np.errstate(all="ignore"):
-            value = np.asarray(_COMPUTE[prop](exact), dtype=np.float64)
-        good = np.isfinite(value) & (value >= 0.0 if prop in _MAY_VANISH else value > 0.0)
-        lost = int(np.count_nonzero(~good & known & ~np.asarray(mask)))
-        if lost:
-            warnings.warn(
-                f"air: {prop}: {lost} value(s) had no finite positive result and became NaN",
-                DropkitWarning,
-                stacklevel=5,
-            )
-        value = np.where(good & known & ~np.asarray(mask), value, np.nan)
-        return float(value) if scalar else value
 
     def _property(self, prop: str) -> Any:
         return self._give(STATEMENTS[prop].kind, self._si(prop))
@@ -257,12 +219,40 @@ class Air:
 
     # ------------------------------------------------ what it rests on
     def available(self) -> tuple[str, ...]:
-        """Names of the properties that can be asked."""
+        """Names of the properties that can be asked.
+
+        Returns
+        -------
+        tuple of str
+            In the order of tables; without the dew point for dry air.
+        """
         dry = bool(np.all(np.equal(self._point.x, 0.0)))
         return tuple(prop for prop in STATEMENTS if not (dry and prop == "dew_point"))
 
     def trail(self, prop: str) -> Trail:
-        """How a property was made: equation, grade, uncertainty, sources, assumptions."""
+        """How a property was made: equation, grade, uncertainty, sources, assumptions.
+
+        Parameters
+        ----------
+        prop : str
+            A property such as ``"viscosity"``.
+
+        Returns
+        -------
+        Trail
+            With the largest uncertainty of an array's elements.
+
+        Raises
+        ------
+        UnknownName
+            Air has no property of this name.
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> dk.air("20 degC").trail("viscosity").sources
+        ('LemmonJacobsen2004',)
+        """
         if prop not in STATEMENTS:
             raise UnknownName(
                 f"air has no property {prop!r}",
@@ -270,16 +260,6 @@ class Air:
                 choices=nearest(str(prop), STATEMENTS),
             )
         return gas_trail(prop, self._point.temperature, self._point.pressure, self._point.x)
-
-    def grade(self, prop: str | None = None) -> Grade:
-        """The grade of a property, or the worst of density and viscosity."""
-        if prop is not None:
-            return self.trail(prop).grade
-        return worst_grade(self.trail(name).grade for name in ("density", "viscosity"))
-
-    def uncertainty(self, prop: str) -> float | None:
-        """Relative standard uncertainty (k = 1); the largest of an array's elements."""
-        return self.trail(prop).uncertainty
 
     @property
     def assumptions(self) -> tuple[str, ...]:
@@ -309,6 +289,12 @@ class Air:
             One row per property, indexed by its name; for arrays, the value column holds one
             array per row. `uncertainty` is relative, k = 1; `uncertainty_95` is in the unit of
             the value. Properties that cannot be given here stand with NaN and the reason.
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> dk.air("20 degC").table().loc["mean_free_path", "unit"]
+        'nm'
         """
         import pandas as pd
 
@@ -336,7 +322,20 @@ class Air:
         return pd.DataFrame(rows).set_index("property")
 
     def to_dict(self) -> dict[str, Any]:
-        """A dict of plain types that survives JSON; `from_dict` rebuilds the air."""
+        """A dict of plain types that survives JSON; `from_dict` rebuilds the air.
+
+        Returns
+        -------
+        dict
+            The condition and the values [SI].
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> room = dk.air("20 degC", humidity="50 %")
+        >>> type(room).from_dict(room.to_dict()).dew_point == room.dew_point
+        True
+        """
         values = {}
         for prop in self.available():
             try:
@@ -356,7 +355,23 @@ class Air:
 
     @classmethod
     def from_dict(cls, data: dict[str, Any]) -> Air:
-        """Rebuild an air from `to_dict`, also after a passage through JSON."""
+        """Rebuild an air from `to_dict`, also after a passage through JSON.
+
+        Parameters
+        ----------
+        data : dict
+            What `to_dict` gave.
+
+        Returns
+        -------
+        Air
+            In SI or with units, as it was.
+
+        Raises
+        ------
+        BadInput
+            The dict of something else.
+        """
         needed = {
             "temperature",
             "pressure",

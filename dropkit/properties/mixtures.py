@@ -11,11 +11,9 @@ import numpy as np
 from dropkit import records, units
 from dropkit.errors import (
     BadInput,
-    CompositionError,
     EstimateRefused,
     EstimateWarning,
     MissingProperty,
-    NotALiquid,
     OutOfRange,
     RangeWarning,
 )
@@ -30,7 +28,7 @@ from dropkit.properties.composition import (
 from dropkit.properties.curves import FloatArray
 from dropkit.properties.interface import Fluid
 from dropkit.properties.mixing.blends import Blend, blend
-from dropkit.properties.mixing.miscibility import check_mixable
+from dropkit.properties.mixing.miscibility import check_mixable, taken_for_granted
 from dropkit.properties.mixing.redlich_kister import RULES
 from dropkit.properties.property_words import GRADED, PROPERTIES, QUOTIENT
 from dropkit.properties.pure import Liquid
@@ -105,6 +103,8 @@ class Mixture(Fluid):
         Mass fractions of the components.
     estimates : {"warn", "allow", "refuse"}
         What to do where a pair has no measured record.
+    quiet : bool
+        Whether the warning of estimates is left out.
     """
 
     def __init__(
@@ -139,7 +139,25 @@ class Mixture(Fluid):
         return (_rebuild, (self._composition, self._estimates))
 
     def grade_codes(self, prop: str, temperature: FloatArray) -> Any:
-        """Place in `GRADES` at each point of an array of temperatures; for dropkit's layers."""
+        """Grade of a property point by point; for dropkit's own layers.
+
+        Parameters
+        ----------
+        prop : str
+            A property that the mixture has.
+        temperature : ndarray
+            Temperatures [K], in the shape of the composition.
+
+        Returns
+        -------
+        ndarray of int
+            Places in `GRADES`, in the same shape.
+
+        Raises
+        ------
+        MissingProperty
+            The mixture does not have it.
+        """
         if prop == "kinematic_viscosity":
             codes = [self.grade_codes(name, temperature) for name in ("viscosity", "density")]
             return np.maximum(*codes)
@@ -198,6 +216,23 @@ class Mixture(Fluid):
             ``"volume"`` means volumes before mixing at `measured_at`.
         measured_at : temperature
             Of those volumes [K, or with a unit].
+
+        Returns
+        -------
+        dict of str to float or array
+            Fractions [-] by component, in the order given.
+
+        Raises
+        ------
+        CompositionError
+            No such basis, or the volume of a solid.
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> ink = dk.mixture({"glycerol": 0.38, "water": "rest"}, by="mass")
+        >>> round(ink.fractions("mole")["glycerol"], 4)
+        0.1071
         """
         check_basis(by)
         keys = self._composition.keys
@@ -264,7 +299,13 @@ class Mixture(Fluid):
         return found if isinstance(found, MissingProperty) else super()._missing(prop)
 
     def available(self) -> tuple[str, ...]:
-        """Names of the properties that can be given for this mixture."""
+        """Names of the properties that can be given for this mixture.
+
+        Returns
+        -------
+        tuple of str
+            In the order of tables.
+        """
         if self._pure is not None:
             return self._pure.available()
         held = {prop for prop in RULES if isinstance(self._blend(prop), Blend)}
@@ -359,19 +400,6 @@ class Mixture(Fluid):
         grades = [block.grade for block in used]
         if rule.estimated:
             grades.append("estimated")
-        assumptions = list(self.assumptions)
-        if len(rule.solvents) > 2:
-            assumptions.append("no ternary terms: each pair enters at its own ratio")
-        assumptions += [
-            f"{rule.records[i].name} + {rule.records[j].name}: no measured record, no excess, one "
-            "phase taken for granted"
-            for i, j in rule.unfitted
-        ]
-        if rule.solutes and len(rule.solvents) > 1:
-            assumptions.append(
-                "the salt acts on the mixed solvent as it does on water; its whole effect counts as "
-                "uncertain"
-            )
         cautions = [text for block in used for text in block.cautions]
         if prop == "viscosity":
             cautions.append("viscosity at low shear")
@@ -383,7 +411,7 @@ class Mixture(Fluid):
             grade=worst_grade(grades),
             uncertainty=self._spread(rule, prop, temperature),
             records=tuple(record_use(block) for block in used),
-            assumptions=tuple(dict.fromkeys(assumptions)),
+            assumptions=tuple(dict.fromkeys((*self.assumptions, *taken_for_granted(rule)))),
             cautions=tuple(dict.fromkeys(cautions)),
             versions=versions(),
         )

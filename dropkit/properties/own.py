@@ -176,7 +176,13 @@ class OwnFluid(Fluid):
 
     # ------------------------------------------------ what Fluid asks for
     def available(self) -> tuple[str, ...]:
-        """Names of the properties that are given or follow."""
+        """Names of the properties that are given or follow.
+
+        Returns
+        -------
+        tuple of str
+            In the order of tables.
+        """
         held = set(self._curves)
         if self._base is not None:
             held.update(self._base.available())

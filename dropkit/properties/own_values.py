@@ -60,13 +60,35 @@ class OwnCurve:
         return f"own {len(self.values)} values, straight lines in {line}"
 
     def scalar(self, temperature: float) -> float:
-        """Value [SI] at a temperature [K]."""
+        """Value at one temperature.
+
+        Parameters
+        ----------
+        temperature : float
+            Temperature [K].
+
+        Returns
+        -------
+        float
+            In SI.
+        """
         if len(self.values) == 1:
             return self.values[0]
         return float(self.array(np.array([temperature]))[0])
 
     def array(self, temperature: FloatArray) -> FloatArray:
-        """Values [SI] at temperatures [K]; end segments go on outside."""
+        """Values at some temperatures; end segments go on outside.
+
+        Parameters
+        ----------
+        temperature : ndarray
+            Temperatures [K].
+
+        Returns
+        -------
+        ndarray
+            In SI, in the same shape.
+        """
         if len(self.values) == 1:
             return np.full(temperature.shape, self.values[0])
         curved = self.quantity in _EXPONENTIAL

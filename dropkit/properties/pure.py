@@ -134,7 +134,13 @@ class Liquid(Fluid):
 
     # ------------------------------------------------ what Fluid asks for
     def available(self) -> tuple[str, ...]:
-        """Names of the properties that the record holds, kinematic viscosity included."""
+        """Names of the properties that the record holds, kinematic viscosity included.
+
+        Returns
+        -------
+        tuple of str
+            In the order of tables.
+        """
         held = self.record.properties
         return tuple(
             prop
@@ -144,7 +150,25 @@ class Liquid(Fluid):
         )
 
     def curve(self, prop: str, *, inside_mixtures: bool = False) -> Curve:
-        """The compiled records of a property; for dropkit's own layers."""
+        """The compiled records of a property; for dropkit's own layers.
+
+        Parameters
+        ----------
+        prop : str
+            A property that the record holds.
+        inside_mixtures : bool
+            Use the wider range that a record may state for use inside mixtures only.
+
+        Returns
+        -------
+        Curve
+            Made once.
+
+        Raises
+        ------
+        MissingProperty
+            The record does not hold it.
+        """
         name = f"{prop}+" if inside_mixtures else prop
         if name not in self._curves:
             if prop not in self.record.properties:

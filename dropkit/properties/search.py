@@ -116,6 +116,13 @@ class Found:
         -------
         pandas.DataFrame
             Empty where there is no solution.
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> table = dk.liquid("water").find(viscosity="0.5 mPa*s").table()
+        >>> print(f"{table['temperature [K]'][0]:.1f}")
+        328.6
         """
         import pandas as pd
 
@@ -129,7 +136,21 @@ class Found:
         return pd.DataFrame(rows, columns=None if rows else [label, "fluid", "grade"])
 
     def to_dict(self) -> dict[str, Any]:
-        """A dict of plain types that survives JSON; `from_dict` rebuilds the result."""
+        """A dict of plain types that survives JSON; `from_dict` rebuilds the result.
+
+        Returns
+        -------
+        dict
+            Everything but fluids that are no mixtures.
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> ink = dk.mixture({"glycerol": 0.3, "water": "rest"}, by="mass")
+        >>> found = ink.find(viscosity="4.5 mPa*s", at="20 degC")
+        >>> type(found).from_dict(found.to_dict()).message == found.message
+        True
+        """
         mixtures = [fluid for fluid in self.fluids if isinstance(fluid, Mixture)]
         return {
             "kind": "Found",
@@ -147,7 +168,23 @@ class Found:
 
     @classmethod
     def from_dict(cls, data: dict[str, Any]) -> Found:
-        """Rebuild a result from `to_dict`; fluids come back where they are mixtures."""
+        """Rebuild a result from `to_dict`; fluids come back where they are mixtures.
+
+        Parameters
+        ----------
+        data : dict
+            What `to_dict` gave, also after a passage through JSON.
+
+        Returns
+        -------
+        Found
+            With the same solutions.
+
+        Raises
+        ------
+        BadInput
+            The dict of something else.
+        """
         needed = {"quantity", "target", "vary", "by", "values", "mass_fractions", "between",
                   "reaches", "in_units"}  # fmt: skip
         if not isinstance(data, dict) or data.get("kind") != "Found" or not needed <= data.keys():

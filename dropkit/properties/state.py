@@ -12,8 +12,10 @@ from dropkit.errors import BadInput, MissingProperty
 from dropkit.properties import display
 from dropkit.properties.interface import Fluid
 from dropkit.properties.jsonable import from_plain, frozen, to_plain
+from dropkit.properties.property_attributes import PropertyAttributes
 from dropkit.properties.property_words import GRADED, PROPERTIES, property_name
-from dropkit.provenance import Grade, Trail, worst_grade
+from dropkit.properties.traced import Traced
+from dropkit.provenance import Trail
 from dropkit.validity import Outside
 
 if TYPE_CHECKING:
@@ -27,7 +29,7 @@ TABLE_COLUMNS = [
 ]  # fmt: skip
 
 
-class State:
+class State(PropertyAttributes, Traced):
     """Frozen properties of a fluid at one temperature or an array of temperatures.
 
     Made by ``fluid.at(temperature)``. Each property is an attribute, computed on first
@@ -45,6 +47,8 @@ class State:
         How it was asked: None for SI, else Quantities in the registry of who asked.
     outside : {"raise", "warn", "nan", "allow"}
         The range policy.
+    name : str
+        What to call it where there is no fluid.
 
     Examples
     --------
@@ -89,11 +93,35 @@ class State:
 
     # ------------------------------------------------ how it was asked
     def si(self) -> State:
-        """The same state giving SI floats and arrays."""
+        """The same state giving SI floats and arrays.
+
+        Returns
+        -------
+        State
+            What was computed is shared.
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> round(dk.liquid("water").at("20 degC").si().surface_tension, 4)
+        0.0727
+        """
         return self._turned(None)
 
     def with_units(self) -> State:
-        """The same state giving Quantities."""
+        """The same state giving Quantities.
+
+        Returns
+        -------
+        State
+            What was computed is shared.
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> print(f"{dk.liquid('water').at(293.15).with_units().surface_tension:.2f}")
+        72.74 millinewton / meter
+        """
         return self._turned(self._asked or units.Asked())
 
     def _turned(self, asked: units.Asked | None) -> State:
@@ -134,80 +162,43 @@ class State:
         """Temperature [K]."""
         return self._give("temperature", self._temperature)
 
-    @property
-    def density(self) -> Any:
-        """Density [kg/m3]."""
-        return self._property("density")
-
-    @property
-    def viscosity(self) -> Any:
-        """Dynamic viscosity at low shear [Pa*s]."""
-        return self._property("viscosity")
-
-    @property
-    def kinematic_viscosity(self) -> Any:
-        """Kinematic viscosity [m2/s]."""
-        return self._property("kinematic_viscosity")
-
-    @property
-    def surface_tension(self) -> Any:
-        """Surface tension [N/m]."""
-        return self._property("surface_tension")
-
-    @property
-    def vapour_pressure(self) -> Any:
-        """Vapour pressure, absolute [Pa]."""
-        return self._property("vapour_pressure")
-
-    @property
-    def heat_of_vaporisation(self) -> Any:
-        """Heat of vaporisation [J/kg]."""
-        return self._property("heat_of_vaporisation")
-
-    @property
-    def heat_capacity(self) -> Any:
-        """Isobaric heat capacity of the liquid [J/(kg*K)]."""
-        return self._property("heat_capacity")
-
-    @property
-    def thermal_conductivity(self) -> Any:
-        """Thermal conductivity [W/(m*K)]."""
-        return self._property("thermal_conductivity")
-
-    @property
-    def static_permittivity(self) -> Any:
-        """Relative static permittivity [-]."""
-        return self._property("static_permittivity")
-
-    @property
-    def speed_of_sound(self) -> Any:
-        """Speed of sound [m/s]."""
-        return self._property("speed_of_sound")
-
-    @property
-    def refractive_index(self) -> Any:
-        """Refractive index at 589 nm [-]."""
-        return self._property("refractive_index")
-
-    @property
-    def diffusivity_in_air(self) -> Any:
-        """Diffusivity of the vapour in air at 101325 Pa [m2/s]."""
-        return self._property("diffusivity_in_air")
-
-    @property
-    def electrical_conductivity(self) -> Any:
-        """Electrical conductivity, an order of magnitude [S/m]."""
-        return self._property("electrical_conductivity")
-
     # ------------------------------------------------ what it rests on
     def available(self) -> tuple[str, ...]:
-        """Names of the properties that can be asked."""
+        """Names of the properties that can be asked.
+
+        Returns
+        -------
+        tuple of str
+            In the order of tables.
+        """
         if self._fluid is not None:
             return self._fluid.available()
         return tuple(prop for prop in PROPERTIES if prop in self._values)
 
     def trail(self, prop: str) -> Trail:
-        """How a property was made."""
+        """How a property was made: records, methods, grade, ranges, cautions.
+
+        Parameters
+        ----------
+        prop : str
+            A property such as ``"viscosity"``.
+
+        Returns
+        -------
+        Trail
+            At this temperature.
+
+        Raises
+        ------
+        UnknownName, MissingProperty
+            No property is called so; it is not known here.
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> dk.liquid("water").at("20 degC").trail("density").sources
+        ('IAPWS1995',)
+        """
         property_name(prop)
         if prop not in self._trails:
             if self._fluid is None or prop not in self._fluid.available():
@@ -215,17 +206,6 @@ class State:
             assert self._fluid is not None
             self._trails[prop] = self._fluid._trail(prop, self._temperature)
         return self._trails[prop]
-
-    def grade(self, prop: str | None = None) -> Grade:
-        """The grade of a property, or the worst of density, viscosity and surface tension."""
-        if prop is not None:
-            return self.trail(prop).grade
-        held = [self.trail(name).grade for name in GRADED if name in self.available()]
-        return worst_grade(held) if held else "estimated"
-
-    def uncertainty(self, prop: str) -> float | None:
-        """Relative standard uncertainty (k = 1), where one is stated."""
-        return self.trail(prop).uncertainty
 
     @property
     def cautions(self) -> tuple[str, ...]:
@@ -279,6 +259,18 @@ class State:
         -------
         NumbersSheet
             Each number with what it compares and the limits that the trade quotes.
+
+        Raises
+        ------
+        BadInput, UnknownName
+            A length or velocity that is none; surroundings that no number takes.
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> sheet = dk.liquid("water").at("20 degC").numbers("50 um", "6 m/s")
+        >>> round(sheet["weber"], 1)
+        24.7
         """
         # The one stated exception to the order of the layers: see DEVELOPERS.md.
         from dropkit.numbers.sheet import numbers_sheet
@@ -301,6 +293,12 @@ class State:
             holds one array per row. `uncertainty` is relative, k = 1; `uncertainty_95`
             is in the unit of the value. Properties that cannot be given here stand
             with NaN and the reason.
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> dk.liquid("water").at("20 degC").table().loc["viscosity", "unit"]
+        'mPa*s'
         """
         import pandas as pd
 
@@ -329,7 +327,20 @@ class State:
         return pd.DataFrame(rows, columns=TABLE_COLUMNS).set_index("property")
 
     def to_dict(self) -> dict[str, Any]:
-        """A dict of plain types that survives JSON; `from_dict` rebuilds the state."""
+        """A dict of plain types that survives JSON; `from_dict` rebuilds the state.
+
+        Returns
+        -------
+        dict
+            Values [SI], trails, reasons and cautions.
+
+        Examples
+        --------
+        >>> import dropkit as dk
+        >>> state = dk.liquid("water").at("20 degC")
+        >>> type(state).from_dict(state.to_dict()) == state
+        True
+        """
         values, trails, reasons = {}, {}, {}
         for prop, value, trail, reason in self._given():
             if trail is None:
@@ -350,7 +361,23 @@ class State:
 
     @classmethod
     def from_dict(cls, data: dict[str, Any]) -> State:
-        """Rebuild a state from `to_dict`; it keeps its numbers and trails, not its fluid."""
+        """Rebuild a state from `to_dict`; it keeps its numbers and trails, not its fluid.
+
+        Parameters
+        ----------
+        data : dict
+            What `to_dict` gave, also after a passage through JSON.
+
+        Returns
+        -------
+        State
+            In SI or with units, as it was.
+
+        Raises
+        ------
+        BadInput
+            The dict of something else.
+        """
         needed = {"name", "temperature", "with_units", "values", "trails", "reasons", "cautions"}
         if not isinstance(data, dict) or data.get("kind") != "State" or not needed <= data.keys():
             raise BadInput("This is no dict of a State", allowed="what State.to_dict() gave")

@@ -298,6 +298,38 @@ def check_points(folder: Folder, name: str, record: Record) -> list[str]:
     return found
 
 
+def tolerances(folder: Folder, name: str, record: Record) -> list[str]:
+    """No check is laxer than what the record says of itself: two standard uncertainties."""
+    found = []
+    for block in blocks(record):
+        for check in block.checks:
+            allowed = 2.0 * relative_uncertainty(block, check["value"])
+            if check["tolerance"] > 1.01 * allowed:  # the builder rounds upwards
+                found.append(
+                    f"{block.label}: check at {check['T']:g} K has the tolerance "
+                    f"{check['tolerance']:.2%}, twice the uncertainty is {allowed:.2%}"
+                )
+    return found
+
+
+def held(folder: Folder, record: Record, block: PropertyRecord) -> tuple[float, int]:
+    """Share of a block's independent points within two standard uncertainties, and their number.
+
+    The points are those that the builder compared it with: role "second" in its residuals.
+    """
+    stem = block.label.partition(":")[0].partition("/")[2]
+    place = folder.root / "build" / "residuals" / f"{stem}.csv"
+    number = block.label.rpartition(" ")[2]
+    inside = []
+    with place.open(encoding="utf-8", newline="") as lines:
+        for row in csv.DictReader(lines):
+            if (row["property"], row["block"], row["role"]) == (block.property, number, "second"):
+                off = abs(float(row["deviation_percent"])) / 100.0
+                u = relative_uncertainty(block, float(row["value"]))
+                inside.append(off <= 2.001 * u)
+    return (float(np.mean(inside)) if inside else 1.0), len(inside)
+
+
 def sane(folder: Folder, name: str, record: Record) -> list[str]:
     """Finite and positive over the whole range, ends included, and of a plausible size."""
     found = []
@@ -475,6 +507,7 @@ RECORD_CHECKS: list[Callable[[Folder, str, Record], list[str]]] = [
     points,
     equations,
     check_points,
+    tolerances,
     sane,
     ends,
     joins,

@@ -365,7 +365,7 @@ def build_block(
             name: numbers[name] for name in ("points", "median", "p95", "worst")
         }
     record["checks"] = [dict(check) for check in spec.get("checks", [])] or chosen_checks(
-        inside or [d for d in fitted if d.role == "fit"], record, spread.covering
+        inside or [d for d in fitted if d.role == "fit"], record
     )
     verify(block.subject, prop, record)
     record["cautions"] = list(spec.get("cautions", []))

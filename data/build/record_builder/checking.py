@@ -17,13 +17,14 @@ _NEAREST = 3
 
 
 def chosen_checks(
-    deviations: Sequence[Deviation], record: Mapping[str, Any], spread: float
+    deviations: Sequence[Deviation], record: Mapping[str, Any]
 ) -> list[dict[str, Any]]:
     """Up to three checks: near 298.15 K, at the low end, at the high end.
 
     Of the three points nearest to each temperature the one of median deviation is taken, so
-    that a check is neither the luckiest point nor a stray one. `spread` is the relative standard
-    uncertainty that covers the independent points; the tolerance is twice that.
+    that a check is neither the luckiest point nor a stray one. The tolerance is twice the
+    record's standard uncertainty: where a point lies further off, that is to be widened or the
+    spec to name other checks.
     """
     low, high = record["range"]
     inside = [d for d in deviations if low <= d.point.temperature <= high]
@@ -37,12 +38,12 @@ def chosen_checks(
         check: dict[str, Any] = {"T": point.temperature}
         if not np.isnan(point.fraction):
             check["fraction"] = float(f"{point.fraction:.8g}")
-        wider = spread
+        wider = record["uncertainty"]
         if "uncertainty_absolute" in record:
-            wider = max(spread, record["uncertainty_absolute"] / point.value)
+            wider = max(wider, record["uncertainty_absolute"] / point.value)
         place = f"data/published/{point.file}.csv" + (f", {point.doi}" if point.doi else "")
         check |= {"value": point.value, "source": point.key, "place": place}
-        check["tolerance"] = round_up(2.0 * wider)
+        check["tolerance"] = round_up(2.0 * wider, 3)
         if check not in checks:
             checks.append(check)
     return checks
