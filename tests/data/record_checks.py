@@ -405,7 +405,8 @@ def slopes(folder: Folder, name: str, record: Record) -> list[str]:
             continue
         low, high = widest(block)
         if block.property == "density" and "water" in name.split("/")[1].split("__"):
-            low = max(low, WATER_DENSEST)
+            # Water's own maximum; a block that ends below it holds no water-rich mixture.
+            low = WATER_DENSEST if low < WATER_DENSEST < high else low
         T = np.linspace(low, high, 401)
         for w in fractions(record, block, 21):
             steps = np.diff(value(folder, record, block, T, w)) * direction
