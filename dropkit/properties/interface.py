@@ -101,7 +101,7 @@ class Fluid(Evaluation):
         Returns
         -------
         float or None
-            The largest over the temperatures [-]; None where none is stated.
+            The largest over the temperatures [-]; None where none is known, as out of range.
 
         Raises
         ------
@@ -124,8 +124,8 @@ class Fluid(Evaluation):
         prop : str
             A property such as ``"viscosity"``.
         temperature : float, array or with a unit, optional
-            Where it is asked [K]. Where given, only the records that serve it are named, with the cautions that
-            apply there, such as ``"supercooled"``.
+            Where it is asked [K]. Where given, only the records that serve it are named,
+            with the cautions that apply there, such as ``"supercooled"``.
 
         Returns
         -------

@@ -53,7 +53,7 @@ class PropertyMethods:
         Raises
         ------
         MissingProperty, OutOfRange, BadInput
-            It is not known of this fluid; not there; or that is no temperature.
+            Not known of this fluid; outside its range; not a temperature or shape that fits.
         """
         return self._look("density", temperature, outside)
 
@@ -79,7 +79,7 @@ class PropertyMethods:
         Raises
         ------
         MissingProperty, OutOfRange, BadInput
-            It is not known of this fluid; not there; or that is no temperature.
+            Not known of this fluid; outside its range; not a temperature or shape that fits.
 
         Examples
         --------
@@ -116,7 +116,7 @@ class PropertyMethods:
         Raises
         ------
         MissingProperty, OutOfRange, BadInput
-            It is not known of this fluid; not there; or that is no temperature.
+            Not known of this fluid; outside its range; not a temperature or shape that fits.
         """
         return self._look("kinematic_viscosity", temperature, outside)
 
@@ -142,7 +142,7 @@ class PropertyMethods:
         Raises
         ------
         MissingProperty, OutOfRange, BadInput
-            It is not known of this fluid; not there; or that is no temperature.
+            Not known of this fluid; outside its range; not a temperature or shape that fits.
 
         Examples
         --------
@@ -174,7 +174,7 @@ class PropertyMethods:
         Raises
         ------
         MissingProperty, OutOfRange, BadInput
-            It is not known of this fluid; not there; or that is no temperature.
+            Not known of this fluid; outside its range; not a temperature or shape that fits.
         """
         return self._look("vapour_pressure", temperature, outside)
 
@@ -200,7 +200,7 @@ class PropertyMethods:
         Raises
         ------
         MissingProperty, OutOfRange, BadInput
-            It is not known of this fluid; not there; or that is no temperature.
+            Not known of this fluid; outside its range; not a temperature or shape that fits.
         """
         return self._look("heat_of_vaporisation", temperature, outside)
 
@@ -226,7 +226,7 @@ class PropertyMethods:
         Raises
         ------
         MissingProperty, OutOfRange, BadInput
-            It is not known of this fluid; not there; or that is no temperature.
+            Not known of this fluid; outside its range; not a temperature or shape that fits.
         """
         return self._look("heat_capacity", temperature, outside)
 
@@ -252,7 +252,7 @@ class PropertyMethods:
         Raises
         ------
         MissingProperty, OutOfRange, BadInput
-            It is not known of this fluid; not there; or that is no temperature.
+            Not known of this fluid; outside its range; not a temperature or shape that fits.
         """
         return self._look("thermal_conductivity", temperature, outside)
 
@@ -278,7 +278,7 @@ class PropertyMethods:
         Raises
         ------
         MissingProperty, OutOfRange, BadInput
-            It is not known of this fluid; not there; or that is no temperature.
+            Not known of this fluid; outside its range; not a temperature or shape that fits.
         """
         return self._look("static_permittivity", temperature, outside)
 
@@ -304,7 +304,7 @@ class PropertyMethods:
         Raises
         ------
         MissingProperty, OutOfRange, BadInput
-            It is not known of this fluid; not there; or that is no temperature.
+            Not known of this fluid; outside its range; not a temperature or shape that fits.
         """
         return self._look("speed_of_sound", temperature, outside)
 
@@ -330,7 +330,7 @@ class PropertyMethods:
         Raises
         ------
         MissingProperty, OutOfRange, BadInput
-            It is not known of this fluid; not there; or that is no temperature.
+            Not known of this fluid; outside its range; not a temperature or shape that fits.
         """
         return self._look("refractive_index", temperature, outside)
 
@@ -356,7 +356,7 @@ class PropertyMethods:
         Raises
         ------
         MissingProperty, OutOfRange, BadInput
-            It is not known of this fluid; not there; or that is no temperature.
+            Not known of this fluid; outside its range; not a temperature or shape that fits.
         """
         return self._look("diffusivity_in_air", temperature, outside)
 
@@ -382,6 +382,6 @@ class PropertyMethods:
         Raises
         ------
         MissingProperty, OutOfRange, BadInput
-            It is not known of this fluid; not there; or that is no temperature.
+            Not known of this fluid; outside its range; not a temperature or shape that fits.
         """
         return self._look("electrical_conductivity", temperature, outside)

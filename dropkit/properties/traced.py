@@ -84,7 +84,7 @@ class Traced:
         Returns
         -------
         float or None
-            The largest of an array's elements [-]; None where none is stated.
+            The largest of an array's elements [-]; None where none is known, as out of range.
 
         Raises
         ------
