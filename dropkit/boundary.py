@@ -10,13 +10,12 @@ from __future__ import annotations
 import functools
 import inspect
 import math
-import warnings
 from collections.abc import Callable, Mapping
 from typing import Any, Final, Generic, ParamSpec, Protocol, TypeAlias, TypeVar, overload
 
 import numpy as np
 
-from dropkit.errors import BadInput, DropkitError, DropkitWarning
+from dropkit.errors import BadInput, DropkitError, DropkitWarning, warn_user
 from dropkit.unit_table import NOMENCLATURE, Kind, kind_of
 from dropkit.units import Asked, give, read
 from dropkit.validity import Domain
@@ -154,10 +153,9 @@ class Boundary(Generic[P, R]):
         deliver = _Delivery(self._reads, given, shape, series, asked, finite)
         ready = deliver.all(result, self._results)
         if deliver.bad:
-            warnings.warn(
+            warn_user(
                 f"{self.__name__}: {deliver.bad} result(s) had no finite value and became NaN",
                 DropkitWarning,
-                stacklevel=4,
             )
         return ready
 

@@ -7,6 +7,8 @@ what to do next. Each class is also the natural built-in exception, so that
 
 from __future__ import annotations
 
+import sys
+import warnings
 from collections.abc import Iterable, Sequence
 
 __all__ = [
@@ -30,6 +32,7 @@ __all__ = [
     "UnknownName",
     "Unphysical",
     "nearest",
+    "warn_user",
 ]
 
 
@@ -172,3 +175,19 @@ class EstimateWarning(DropkitWarning):
 
 class RecalledWarning(DropkitWarning):
     """A record holds a value from memory, without a source that was seen."""
+
+
+def warn_user(text: str, category: type[DropkitWarning]) -> None:
+    """Warn at the line of the user's that led here, however many of dropkit's lie between.
+
+    Parameters
+    ----------
+    text : str
+        What happened.
+    category : type
+        One of the warnings of this module.
+    """
+    frame, level = sys._getframe(1), 2
+    while frame.f_back is not None and frame.f_globals.get("__name__", "").startswith("dropkit."):
+        frame, level = frame.f_back, level + 1
+    warnings.warn(text, category, stacklevel=level)

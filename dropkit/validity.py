@@ -11,13 +11,12 @@ The words of the policy mean the same everywhere in dropkit:
 from __future__ import annotations
 
 import math
-import warnings
 from dataclasses import dataclass
 from typing import Any, Final, Literal, TypeAlias
 
 import numpy as np
 
-from dropkit.errors import BadInput, OutOfRange, RangeWarning, Unphysical
+from dropkit.errors import BadInput, OutOfRange, RangeWarning, Unphysical, warn_user
 
 __all__ = ["OUTSIDE", "Domain", "Outside", "Range", "check_outside", "settle"]
 
@@ -150,9 +149,7 @@ def check_domain(name: str, value: Any, domain: Domain) -> None:
         )
 
 
-def settle(
-    subject: str, value: Any, limits: Range, outside: str, *, hint: str = "", stacklevel: int = 3
-) -> Any:
+def settle(subject: str, value: Any, limits: Range, outside: str, *, hint: str = "") -> Any:
     """Apply the range policy to `value` (float or float array, SI) before a computation.
 
     Returns a mask of the elements that must become NaN: False, True, or a boolean
@@ -181,7 +178,7 @@ def settle(
     else:
         what = f"{subject}: {limits.what} {value:g} {limits.unit}".rstrip() + " is out of range"
     if outside == "warn":
-        warnings.warn(f"{what}; stated range {limits}", RangeWarning, stacklevel=stacklevel)
+        warn_user(f"{what}; stated range {limits}", RangeWarning)
         return False
     nearest = limits.low if np.nanmin(value) < limits.low else limits.high
     raise OutOfRange(

@@ -3,7 +3,9 @@
 from __future__ import annotations
 
 import pickle
+import warnings
 
+import numpy as np
 import pytest
 
 import dropkit as dk
@@ -59,3 +61,27 @@ def test_an_error_travels_whole() -> None:
 def test_nearest_ignores_case_and_keeps_the_spelling() -> None:
     assert nearest("WEBBER", ["Weber", "ohnesorge"]) == ["Weber"]
     assert nearest("zzz", ["Weber"]) == []
+
+
+@pytest.mark.parametrize(
+    "ask",
+    [
+        lambda: dk.liquid("water").density(450.0, outside="warn"),
+        lambda: dk.liquid("water").density(np.array([300.0, 450.0]), outside="warn"),
+        lambda: dk.liquid("water").at("200 degC", outside="warn").viscosity,
+        lambda: dk.mixture({"glycerol": 0.3, "water": "rest"}, by="mass").viscosity(
+            390.0, outside="warn"
+        ),
+        lambda: dk.mixture({"toluene": 0.3, "acetone": "rest"}, by="mass"),
+        lambda: dk.liquid("IPA").electrical_conductivity("25 degC"),
+        lambda: dk.liquid("water").viscosity(100.0, outside="allow"),
+        lambda: dk.air("20 degC", outside="warn", pressure="20 MPa").density,
+    ],
+)
+def test_warnings_point_at_the_users_line_once(ask):
+    with warnings.catch_warnings(record=True) as caught:
+        warnings.simplefilter("always")
+        ask()
+    assert len(caught) == 1, [str(entry.message) for entry in caught]
+    assert caught[0].filename == __file__
+    assert issubclass(caught[0].category, dk.errors.DropkitWarning)

@@ -84,9 +84,7 @@ def outside_mask(subject: str, outside: str, *checked: tuple[Any, Range]) -> Any
     check_outside(outside)
     mask: Any = False
     for value, limits in checked:
-        # Up to the line that asked: plain floats take a shorter way through the boundary.
-        above = 8 if isinstance(value, np.ndarray) else 6
-        mask = mask | settle(subject, value, limits, outside, stacklevel=above)
+        mask = mask | settle(subject, value, limits, outside)
     return mask
 
 

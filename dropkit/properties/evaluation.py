@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-import warnings
 from collections.abc import Callable, Sequence
 from dataclasses import replace
 from typing import Any
@@ -10,12 +9,7 @@ from typing import Any
 import numpy as np
 
 from dropkit import units
-from dropkit.errors import (
-    BadInput,
-    DropkitWarning,
-    MissingProperty,
-    RecalledWarning,
-)
+from dropkit.errors import BadInput, DropkitWarning, MissingProperty, RecalledWarning, warn_user
 from dropkit.properties.curves import CHUNK, Fast, FloatArray
 from dropkit.properties.property_methods import PropertyMethods
 from dropkit.properties.property_words import KELVIN_HINT, QUOTIENT
@@ -177,11 +171,10 @@ class Evaluation(PropertyMethods):
         self._looked.add(prop)
         used = [block.label for block in self._blocks(prop) if block.grade == "recalled"]
         if used:
-            warnings.warn(
+            warn_user(
                 f"{prop} of {self.name} rests on memory ({', '.join(used)}; grade 'recalled'): "
                 "uncertain by 5 % at least",
                 RecalledWarning,
-                stacklevel=4,
             )
 
     def _evaluate(self, prop: str, temperature: Any, outside: Outside) -> Any:
@@ -286,10 +279,9 @@ class Evaluation(PropertyMethods):
 
     def _not_finite(self, prop: str, count: int) -> float:
         many = "1 value" if count == 1 else f"{count} values"
-        warnings.warn(
+        warn_user(
             f"{prop} of {self.name}: {many} far outside the range came out non-finite or not "
             "positive and became NaN",
             DropkitWarning,
-            stacklevel=5,
         )
         return float("nan")

@@ -2,13 +2,12 @@
 
 from __future__ import annotations
 
-import warnings
 from collections.abc import Callable
 from typing import Any, Final, NamedTuple
 
 import numpy as np
 
-from dropkit.errors import DropkitWarning, MissingProperty
+from dropkit.errors import DropkitWarning, MissingProperty, warn_user
 from dropkit.properties import humid_air
 from dropkit.validity import Outside, Range, settle
 
@@ -77,7 +76,7 @@ def gas_value(prop: str, at: Point, outside: Outside) -> Any:
     known: Any = np.isfinite(at.x)
     mask: Any = False
     if prop == "vapour_diffusivity":
-        mask = settle(f"air: {prop}", at.temperature, DIFFUSING, outside, stacklevel=5)
+        mask = settle(f"air: {prop}", at.temperature, DIFFUSING, outside)
     if prop == "dew_point":
         known = known & np.greater(at.x, 0.0)
         if scalar and at.x == 0.0:
@@ -91,10 +90,9 @@ def gas_value(prop: str, at: Point, outside: Outside) -> Any:
     good = np.isfinite(value) & (value >= 0.0 if prop in _MAY_VANISH else value > 0.0)
     lost = int(np.count_nonzero(~good & known & ~np.asarray(mask)))
     if lost:
-        warnings.warn(
+        warn_user(
             f"air: {prop}: {lost} value(s) had no finite positive result and became NaN",
             DropkitWarning,
-            stacklevel=5,
         )
     value = np.where(good & known & ~np.asarray(mask), value, np.nan)
     return float(value) if scalar else value

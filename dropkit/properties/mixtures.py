@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-import warnings
 from collections.abc import Callable, Mapping, Sequence
 from typing import Any, Final, Literal
 
@@ -16,6 +15,7 @@ from dropkit.errors import (
     MissingProperty,
     OutOfRange,
     RangeWarning,
+    warn_user,
 )
 from dropkit.properties import display
 from dropkit.properties.cautions import mixture_cautions, mixture_phases
@@ -190,10 +190,8 @@ class Mixture(Fluid):
             text += f" Estimated: {', '.join(estimated)} at 95 %."
         if refused:
             text += f" Refused: {', '.join(refused)}."
-        warnings.warn(
-            text + " estimates='allow' silences this, 'refuse' forbids them.",
-            EstimateWarning,
-            stacklevel=4,
+        warn_user(
+            text + " estimates='allow' silences this, 'refuse' forbids them.", EstimateWarning
         )
 
     # ------------------------------------------------ composition
@@ -389,7 +387,7 @@ class Mixture(Fluid):
                 ),
                 hint="outside='warn', 'nan' or 'allow' changes what happens",
             )
-        warnings.warn(what, RangeWarning, stacklevel=5)
+        warn_user(what, RangeWarning)
         return mask
 
     def _record_trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
