@@ -274,7 +274,12 @@ def _quick(
     costs more than most cores.
     """
     head, call, tests = [], [], []
-    space: dict[str, Any] = {"_core": core, "_long": boundary._long, "inf": math.inf}
+    space: dict[str, Any] = {
+        "__name__": __name__,  # so that a warning knows the frame for one of ours
+        "_core": core,
+        "_long": boundary._long,
+        "inf": math.inf,
+    }
     starred = False
     for word, parameter in signature.parameters.items():
         text = word
