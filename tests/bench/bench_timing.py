@@ -6,9 +6,11 @@ a neighbour's load on the machine would count as ours by the clock on the wall.
 
 from __future__ import annotations
 
+import os
 import statistics
 import subprocess
 import sys
+import tempfile
 from collections.abc import Callable, Iterable
 from time import process_time
 from typing import Any, NamedTuple
@@ -84,18 +86,27 @@ print(b[0] - a[0], b[1] - a[1])
 """
 
 
+def _steps(script: str, environment: dict[str, str]) -> list[tuple[float, ...]]:
+    run = subprocess.run(
+        [sys.executable, "-c", script],
+        capture_output=True,
+        text=True,
+        check=True,
+        env=environment,
+    )
+    return [tuple(map(float, line.split())) for line in run.stdout.splitlines()]
+
+
 def start_costs(script: str = STARTS, runs: int = 9) -> list[tuple[float, float]]:
     """Median seconds by the clock and of the processor, each step of a script in new processes.
 
     The default's steps: numpy, dropkit on top, the first SI look-up, the first unit string. On a
     busy machine the processor's time says more.
     """
-    results = []
-    for _ in range(runs + 1):
-        run = subprocess.run(
-            [sys.executable, "-c", script], capture_output=True, text=True, check=True
-        )
-        results.append([tuple(map(float, line.split())) for line in run.stdout.splitlines()])
+    with tempfile.TemporaryDirectory() as folder:
+        # Compiled modules are kept, as on a user's machine, whatever this environment says.
+        kept = {"PYTHONPYCACHEPREFIX": folder, "PYTHONDONTWRITEBYTECODE": ""}
+        results = [_steps(script, {**os.environ, **kept}) for _ in range(runs + 1)]
     steps = zip(*results[1:], strict=True)  # the first run compiles the modules
     return [
         (statistics.median(a for a, _ in step), statistics.median(b for _, b in step))
