@@ -95,7 +95,13 @@ def property_over_composition(
         colour = f"C{number}"
         axes.plot(share, values, color=colour, label=f"{kelvin - 273.15:g} degC")
         if band:
-            known = pair._trail(property, float(kelvin)).uncertainty or 0.0
+            # Of the points that have values; the rest would make it unknown.
+            good = np.isfinite(values)
+            held = Mixture(
+                Composition(keys, tuple(w[good] for w in mass)), estimates="allow", quiet=True
+            )
+            known = held._trail(property, float(kelvin)).uncertainty
+            known = np.nan if known is None else known
             axes.fill_between(
                 share,
                 # Beyond a half a band is a factor, up and down.

@@ -86,7 +86,7 @@ def property_over_temperature(
         values = display.in_stock(property, found)
         (line,) = axes.plot(kelvin - 273.15, values, label=item.name, color=f"C{number}")
         if band:
-            spread = np.array([item._trail(property, t).uncertainty or 0.0 for t in kelvin[::30]])
+            spread = np.array([_known(item._trail(property, t).uncertainty) for t in kelvin[::30]])
             wide = 2.0 * np.interp(kelvin, kelvin[::30], spread)
             axes.fill_between(
                 kelvin - 273.15,
@@ -113,6 +113,11 @@ def property_over_temperature(
     axes.set_ylabel(label(property))
     axes.legend(fontsize="small")
     return axes
+
+
+def _known(uncertainty: float | None) -> float:
+    """NaN, and so no band, where no uncertainty is known."""
+    return float("nan") if uncertainty is None else uncertainty
 
 
 def _ends(between: Any) -> tuple[float, float]:

@@ -7,6 +7,7 @@ from typing import TYPE_CHECKING, Any, Final, TypeAlias
 
 import numpy as np
 
+from dropkit.properties.property_words import GRADED
 from dropkit.unit_table import KINDS, NOMENCLATURE, Kind
 
 if TYPE_CHECKING:
@@ -89,6 +90,9 @@ _HEADER = ("property", "at 20 degC", "unit", "grade", "range")
 
 def _fluid_rows(fluid: Fluid) -> list[tuple[str, ...]]:
     rows: list[tuple[str, ...]] = []
+    for prop in GRADED:
+        if prop not in fluid.available():
+            rows.append((prop, "none", "", "", str(fluid._missing(prop))))
     for prop in fluid.available():
         limits = fluid.range(prop)
         # At room temperature; a narrow range elsewhere in its middle, and told so.

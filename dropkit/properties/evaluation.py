@@ -183,6 +183,12 @@ class Evaluation(PropertyMethods):
             raise self._missing(prop)
         if hasattr(temperature, "index") and hasattr(temperature, "to_numpy"):
             values = self._evaluate(prop, temperature.to_numpy(dtype=float), outside)
+            if values.shape != temperature.shape:
+                raise BadInput(
+                    f"A Series of {len(temperature)} temperatures does not fit compositions of "
+                    f"shape {self._shape()}",
+                    allowed="as many as there are compositions, or an array",
+                )
             return type(temperature)(values, index=temperature.index, name=prop)
         limits = self._range(prop)
         if isinstance(temperature, np.ndarray) and self._composition_is_settled():
@@ -224,7 +230,10 @@ class Evaluation(PropertyMethods):
     def _one(self, prop: str, temperature: float, limits: Range, lost: Any, unfit: Any) -> float:
         value = self._scalar(prop)
         assert value is not None
-        if unfit is False and self._without_gaps(prop):
+        # Quick look-ups skip the range policy, so they are for what is in range whatever it is.
+        middle = 0.5 * (limits.low + limits.high)
+        inside = not np.any(self._settle_point(prop, middle, "nan"))
+        if inside and self._without_gaps(prop):
             self._fast.setdefault(prop, Fast(limits.low, limits.high, value))
         # Written so that NaN comes out as NaN without a warning.
         if lost or unfit or temperature != temperature:

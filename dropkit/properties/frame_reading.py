@@ -175,7 +175,9 @@ class Table:
         assert self._names is not None
         import pandas as pd
 
-        names = pd.Series([str(name) for name in self._names])
+        blank = np.array([pd.isna(name) for name in self._names], dtype=bool)
+        tell(self.reasons, np.flatnonzero(blank), "liquid is missing")
+        names = pd.Series([str(name) for name in self._names])[~blank]
         for name, numbers in names.groupby(names).indices.items():
             everywhere = np.asarray(numbers)
             rows = everywhere[~np.isnan(self.temperature[everywhere])]

@@ -10,6 +10,7 @@ import numpy as np
 from dropkit import units
 from dropkit.errors import (
     BadInput,
+    CompositionError,
     MissingProperty,
 )
 from dropkit.properties import display
@@ -133,11 +134,14 @@ def _fill_group(
         values[prop][rows] = got
         lost = np.isnan(got)
         codes = np.maximum(codes, np.where(lost, -1, fluid.grade_codes(prop, kelvin)))
-        beyond = ~lost & ~np.asarray(limits.holds(kelvin))
-        tell(reasons, rows[beyond], f"{prop}: extrapolated, outside {limits}")
+        hot = ~np.asarray(limits.holds(kelvin))
+        mixed = np.broadcast_to(fluid._settle_point(prop, kelvin, "nan"), kelvin.shape)
+        tell(reasons, rows[~lost & hot], f"{prop}: extrapolated, outside {limits}")
+        apart = "no record holds this composition at this temperature"
+        tell(reasons, rows[~lost & ~hot & mixed], f"{prop}: extrapolated, {apart}")
         if lost.any():
             inside = np.asarray(limits.holds(kelvin))
-            tell(reasons, rows[lost & inside], f"{prop}: composition out of range")
+            tell(reasons, rows[lost & inside], f"{prop}: out of range, {apart}")
             cold = lost & ~inside & (kelvin < 150.0) & (not with_units)
             tell(reasons, rows[lost & ~inside & ~cold], f"{prop}: temperature outside {limits}")
             tell(reasons, rows[cold], f"{prop}: temperature outside {limits}; {KELVIN_HINT}")
@@ -199,11 +203,21 @@ def grid(
     rest = None
     for name, value in components.items():
         key = resolve(name)
+        if key in axes or key == rest:
+            raise CompositionError(f"{key} appears twice, under two of its names")
         if isinstance(value, str) and value.strip().casefold() == "rest":
+            if rest is not None:
+                raise CompositionError(f"Both {rest} and {key} are 'rest'", allowed="one of them")
             rest = key
             continue
         numbers = np.atleast_1d(np.asarray(units.to_si(value, "ratio", f"fraction of {key}")))
         axes[key] = [float(x) for x in numbers.reshape(-1)]
+    if not axes:
+        raise BadInput(
+            "grid has nothing to vary but the temperature",
+            allowed="fractions of at least one component",
+            hint="For one liquid ask it with an array of temperatures",
+        )
     varied = [key for key, numbers in axes.items() if len(numbers) > 1]
     header = "temperature [degC]" if asked is not None else "temperature"
     flat = np.atleast_1d(np.asarray(kelvin, dtype=float)).reshape(-1)

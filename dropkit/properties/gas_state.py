@@ -82,6 +82,11 @@ class Air(Traced):
     def __delattr__(self, name: str) -> None:
         raise AttributeError("Air is immutable")
 
+    def __eq__(self, other: object) -> bool:
+        return isinstance(other, Air) and other.to_dict() == self.to_dict()
+
+    __hash__ = None  # type: ignore[assignment] # values may be arrays
+
     # ------------------------------------------------ how it was asked
     def si(self) -> Air:
         """The same air giving SI floats and arrays.

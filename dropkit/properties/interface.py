@@ -147,6 +147,8 @@ class Fluid(Evaluation):
         if prop not in self.available():
             raise self._missing(prop)
         kelvin = None if temperature is None else units.to_si(temperature, "temperature")
+        if kelvin is not None:
+            self._common_shape(kelvin)
         return self._trail(prop, kelvin)
 
     @property
@@ -188,6 +190,7 @@ class Fluid(Evaluation):
         kelvin, asked = units.read(temperature, "temperature", "temperature")
         if hasattr(kelvin, "to_numpy"):
             kelvin = kelvin.to_numpy(dtype=float)
+        self._common_shape(kelvin)
         return State(self, kelvin, asked=asked, outside=outside)
 
     def with_values(

@@ -414,21 +414,25 @@ class Mixture(Fluid):
             versions=versions(),
         )
 
-    def _spread(self, rule: Blend, prop: str, temperature: float | FloatArray | None) -> float:
-        """Relative standard uncertainty: of the pairs, the pure ends by their share, and estimates."""
+    def _spread(
+        self, rule: Blend, prop: str, temperature: float | FloatArray | None
+    ) -> float | None:
+        """Relative standard uncertainty: of the pairs, the pure ends by their share, estimates."""
         value = None
         if temperature is not None:
             found = np.asarray(self._evaluate(prop, temperature, "nan"))
             value = float(np.nanmin(found)) if np.isfinite(found).any() else None
+        if 0 in self._shape() or (temperature is not None and value is None):
+            return None
         used = rule.serving(self._mass, temperature)
         known = {id(block): relative_uncertainty(block, value) for block in used}
-        shares = [float(np.max(x)) for x in rule.fractions(self._mass)]
+        with np.errstate(all="ignore"):  # a point of salt alone has no share of solvents
+            shares = [float(np.nanmax(x)) for x in rule.fractions(self._mass)]
+            extra = rule.estimate_error(self._mass, temperature)
         ends = 0.0
         for share, curve in zip(shares, rule.curves, strict=True):
             ends += share * max(known.pop(id(block), 0.0) for block in curve.records)
-        return float(
-            np.hypot(max(ends, *known.values(), 0.0), rule.estimate_error(self._mass, temperature))
-        )
+        return float(np.hypot(max(ends, *known.values(), 0.0), extra))
 
     # ------------------------------------------------ display
     def __repr__(self) -> str:

@@ -2,7 +2,9 @@
 
 from __future__ import annotations
 
+import math
 from collections.abc import Callable, Mapping, Sequence
+from dataclasses import replace
 from typing import Any, Final
 
 import numpy as np
@@ -295,9 +297,12 @@ class OwnFluid(Fluid):
             kinematic = self._curves["kinematic_viscosity"]
             method = f"kinematic viscosity times density ({kinematic.method})"
             density = self._record_trail("density", temperature)
-            return self._own_trail(
+            known = (self._spreads.get("kinematic_viscosity"), density.uncertainty)
+            spread = None if None in known else math.hypot(*(x for x in known if x is not None))
+            made = self._own_trail(
                 prop, method, _constant("kinematic_viscosity", kinematic), density
             )
+            return replace(made, uncertainty=spread)
         curve = self._curves[prop]
         if route == "trend":
             assumed = (f"{prop} follows the record's temperature trend away from the own value",)

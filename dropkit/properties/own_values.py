@@ -90,7 +90,8 @@ class OwnCurve:
             In SI, in the same shape.
         """
         if len(self.values) == 1:
-            return np.full(temperature.shape, self.values[0])
+            # A constant fills no gaps: NaN stays NaN.
+            return np.where(np.isnan(temperature), np.nan, self.values[0])
         curved = self.quantity in _EXPONENTIAL
         x = 1.0 / temperature if curved else temperature
         known = np.array(self.temperatures)

@@ -207,7 +207,9 @@ class Liquid(Fluid):
             subject=self.name,
             method="; ".join(dict.fromkeys(f"{b.form} ({b.obtained})" for b in blocks)),
             grade=worst_grade(block.grade for block in blocks),
-            uncertainty=max(relative_uncertainty(block, value) for block in blocks),
+            uncertainty=None
+            if temperature is not None and value is None
+            else max(relative_uncertainty(block, value) for block in blocks),
             records=tuple(record_use(block) for block in blocks),
             cautions=tuple(dict.fromkeys(cautions)),
             versions=versions(),

@@ -160,6 +160,14 @@ class Found:
             "by": self.by,
             "values": list(self.values),
             "mass_fractions": [fluid.mass_fractions for fluid in mixtures],
+            "made": [
+                {
+                    "assumptions": list(fluid.assumptions),
+                    "rest": fluid._composition.rest,
+                    "estimates": fluid._estimates,
+                }
+                for fluid in mixtures
+            ],
             "between": list(self.between),
             "reaches": list(self.reaches),
             "in_units": self.asked is not None,
@@ -186,12 +194,18 @@ class Found:
             The dict of something else.
         """
         needed = {"quantity", "target", "vary", "by", "values", "mass_fractions", "between",
-                  "reaches", "in_units"}  # fmt: skip
+                  "reaches", "in_units", "made"}  # fmt: skip
         if not isinstance(data, dict) or data.get("kind") != "Found" or not needed <= data.keys():
             raise BadInput("This is no dict of a Found", allowed="what Found.to_dict() gave")
         fluids = tuple(
-            Mixture(Composition(tuple(parts), tuple(parts.values())), quiet=True)
-            for parts in data["mass_fractions"]
+            Mixture(
+                Composition(
+                    tuple(parts), tuple(parts.values()), tuple(made["assumptions"]), made["rest"]
+                ),
+                estimates=made["estimates"],
+                quiet=True,
+            )
+            for parts, made in zip(data["mass_fractions"], data["made"], strict=True)
         )
         return cls(
             data["quantity"], data["target"], data["vary"], data["by"], tuple(data["values"]),
@@ -346,6 +360,9 @@ def _ends(between: Any, kind: str, allowed: tuple[float, float]) -> tuple[float,
     warm = kind == "temperature"
     low = units.single(first, kind, "between", plausible=warm)
     high = units.single(second, kind, "between", plausible=warm)
+    # Rounding of shares must not refuse an end that is meant.
+    if abs(high - allowed[1]) < 1e-9:
+        high = allowed[1]
     if not allowed[0] <= low < high <= allowed[1]:
         raise BadInput(
             f"between runs from {low:g} to {high:g}",

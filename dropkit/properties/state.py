@@ -224,6 +224,8 @@ class State(PropertyAttributes, Traced):
             if prop in self._reasons:
                 yield prop, float("nan"), None, self._reasons[prop]
             if prop not in self.available():
+                if prop in GRADED and self._fluid is not None:
+                    yield prop, float("nan"), None, str(self._fluid._missing(prop))
                 continue
             try:
                 yield prop, self._si(prop), self.trail(prop), ""

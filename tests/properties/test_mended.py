@@ -240,3 +240,93 @@ def test_uncertainty_of_a_mixture_by_hand():
     both = blocks["surface_tension"][0]
     expected = max(both.uncertainty, both.uncertainty_absolute / mix.surface_tension(293.15))
     assert mix.uncertainty("surface_tension", 293.15) == pytest.approx(expected)
+
+
+@pytest.mark.parametrize("outside", ["nan", "allow", "warn"])
+def test_no_policy_changes_what_a_later_look_does(outside):
+    brine = quiet({"NaCl": 0.4, "water": "rest"})
+    with warnings.catch_warnings():
+        warnings.simplefilter("ignore", dk.errors.DropkitWarning)
+        brine.density(293.15, outside=outside)
+        brine.with_values(surface_tension=0.08).kinematic_viscosity(293.15, outside=outside)
+    with pytest.raises(OutOfRange):
+        brine.density(293.15)
+    with pytest.raises(OutOfRange):
+        brine.density("20 degC")
+
+
+@pytest.mark.parametrize(
+    "components",
+    [
+        {"water": "rest", "ethanol": "rest", "glycerol": [0.1, 0.2]},
+        {"ethanol": [0.1, 0.2], "EtOH": [0.3, 0.4], "water": "rest"},
+    ],
+)
+def test_grid_drops_no_component(components):
+    with pytest.raises(CompositionError):
+        dk.grid(components, [293.15], ["density"], by="mass")
+
+
+def test_extrapolated_compositions_say_so_in_a_frame():
+    for columns, prop in (
+        ({"temperature": [293.0], "NaCl": [0.4]}, "density"),
+        ({"temperature": [263.0], "glycerol": [0.3]}, "viscosity"),
+    ):
+        result = dk.lookup(pd.DataFrame(columns), [prop], rest="water", by="mass", outside="allow")
+        assert "extrapolated" in result["reason"].iloc[0]
+
+
+def test_an_own_constant_fills_no_gaps():
+    mine = dk.fluid("x", density=1000.0, kinematic_viscosity=1e-6)
+    for look in (mine.density, mine.viscosity, mine.kinematic_viscosity):
+        assert list(np.isnan(look(np.array([300.0, np.nan])))) == [False, True]
+
+
+def test_the_band_of_a_plot_is_that_of_the_points_in_range():
+    ax = dk.plots.property_over_composition("NaCl", "water", property="density", at="20 degC")
+    spans = ax.collections[0].get_paths()[0].vertices[:, 1]
+    assert np.ptp(spans) > 0
+    width = dk.mixture({"NaCl": 0.1, "water": "rest"}, by="mass").uncertainty("density", 293.15)
+    assert width > 0
+
+
+def test_shapes_are_told_wherever_they_meet():
+    many = quiet({"glycerol": np.array([0.1, 0.4, 0.65, 0.95]), "water": "rest"})
+    with pytest.raises(BadInput, match="grid"):
+        many.uncertainty("viscosity", np.array([293.15, 300.0]))
+    with pytest.raises(BadInput, match="grid"):
+        many.at(np.array([293.15, 300.0]))
+    with pytest.raises(BadInput, match="Series"):
+        many.density(pd.Series([293.15]))
+    empty = quiet({"glycerol": np.array([]), "water": "rest"})
+    assert empty.uncertainty("viscosity", 293.15) is None
+    assert "shape (0,)" in repr(empty.at(293.15))
+
+
+def test_rounding_refuses_no_end_of_a_search():
+    for key in ("ethanol", "methanol", "glycerol"):
+        for by in ("mass", "mole", "volume"):
+            mix = quiet({key: 0.3, "water": "rest"})
+            assert mix.find(density=mix.density(293.15), at=293.15, by=by, between=(0, 1))
+
+
+def test_uncertainties_of_own_values_combine_both_ways():
+    spreads = {"kinematic_viscosity": 0.02, "density": 0.01}
+    one = dk.fluid("x", density=1000.0, kinematic_viscosity=1e-6, uncertainty=spreads)
+    assert one.uncertainty("viscosity") == pytest.approx(math.hypot(0.02, 0.01))
+
+
+def test_a_sheet_says_why_it_has_no_value():
+    mix = dk.mixture(
+        {"glycerol": 0.1, "ethanol": 0.1, "water": "rest"}, by="mass", estimates="refuse"
+    )
+    table = mix.at("20 degC").table()
+    assert "no measured record" in table.loc["viscosity", "method"]
+    assert "no measured record" in repr(mix)
+
+
+def test_equal_results_are_equal():
+    room = dk.air("20 degC", humidity="50 %")
+    assert pickle.loads(pickle.dumps(room)) == room
+    sheet = dk.liquid("water").at(300.0).numbers(60e-6, 5.0)
+    assert pickle.loads(pickle.dumps(sheet)) == sheet
