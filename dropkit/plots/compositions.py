@@ -95,18 +95,12 @@ def property_over_composition(
         colour = f"C{number}"
         axes.plot(share, values, color=colour, label=f"{kelvin - 273.15:g} degC")
         if band:
-            # Of the points that have values; the rest would make it unknown.
-            good = np.isfinite(values)
-            held = Mixture(
-                Composition(keys, tuple(w[good] for w in mass)), estimates="allow", quiet=True
-            )
-            known = held._trail(property, float(kelvin)).uncertainty
-            known = np.nan if known is None else known
+            wide = 2.0 * _spread(keys, mass, values, property, float(kelvin))
             axes.fill_between(
                 share,
                 # Beyond a half a band is a factor, up and down.
-                values * (1.0 - 2.0 * known if known < 0.25 else 1.0 / (1.0 + 2.0 * known)),
-                values * (1.0 + 2.0 * known),
+                values * np.where(wide < 0.5, 1.0 - wide, 1.0 / (1.0 + wide)),
+                values * (1.0 + wide),
                 color=colour,
                 alpha=0.18,
                 linewidth=0,
@@ -135,3 +129,17 @@ def property_over_composition(
     axes.set_ylabel(label(property))
     axes.legend(fontsize="small")
     return axes
+
+
+def _spread(keys: tuple[str, str], mass: Any, values: Any, prop: str, kelvin: float) -> Any:
+    """Relative standard uncertainty along the compositions; NaN, and so no band, without one."""
+    places = np.arange(0, len(mass[0]), 5)
+    found = []
+    for k in places:
+        if not np.isfinite(values[k]):
+            found.append(np.nan)
+            continue
+        parts = Composition(keys, (float(mass[0][k]), float(mass[1][k])))
+        known = Mixture(parts, estimates="allow", quiet=True)._trail(prop, kelvin).uncertainty
+        found.append(np.nan if known is None else known)
+    return np.interp(np.arange(len(mass[0])), places, found)
