@@ -101,6 +101,11 @@ def _one_minus(text: str) -> str:
     return str(1 - Decimal(text))
 
 
+def only(column: str, name: str) -> Callable[[Row], bool]:
+    """A filter for the rows that name one substance in a column."""
+    return lambda row: row[column] == name
+
+
 def pair_rows(
     table: Table,
     components: tuple[str, str],
@@ -249,9 +254,9 @@ def pairs(folder: Path) -> None:
     )
     isopropanol, salt = ("2-propanol", "water"), ("sodium_chloride", "water")
 
-    def single(key: str, name: str, pair: tuple[str, str], basis: str, column: str, **kw) -> None:  # type: ignore[no-untyped-def]  # keywords of pair_rows
+    def single(key: str, name: str, pair: tuple[str, str], basis: str, column: str) -> None:
         table = Table(folder, name)
-        mixture(key, table.head, pair_rows(table, pair, basis, column, **kw))
+        mixture(key, table.head, pair_rows(table, pair, basis, column))
 
     def several(key: str, parts: list[tuple[str, tuple[str, str], str, str, bool]]) -> None:
         head, rows = [], []
@@ -304,20 +309,20 @@ def pairs(folder: Path) -> None:
     rows = []
     for alcohol in ("ethanol", "methanol"):
         rows += pair_rows(spots, (alcohol, "water"), "mass", "mass_fraction_alcohol",
-                          keep=lambda row, name=alcohol: row["alcohol"] == name)  # type: ignore[misc]  # fmt: skip
+                          keep=only("alcohol", alcohol))  # fmt: skip
     mixture("CRCHandbook2016", spots.head, rows)
     recalled = Table(folder, "FROM_MEMORY_alcohol_water_surface_tension_vazquez_1995")
     rows = []
     for alcohol in ("2-propanol", "ethanol"):
         rows += pair_rows(recalled, (alcohol, "water"), "mass", "mass_fraction_alcohol",
-                          keep=lambda row, name=alcohol: row["alcohol"] == name)  # type: ignore[misc]  # fmt: skip
+                          keep=only("alcohol", alcohol))  # fmt: skip
     mixture("Vazquez1995recalled", recalled.head, rows)
 
     aqueous = Table(folder, "aqueous_mixtures_density_thermoml")
     rows = []
     for alcohol in ("2-propanol", "ethanol", "glycerol"):
         rows += pair_rows(aqueous, (alcohol, "water"), "mole", "mole_fraction_substance_1",
-                          keep=lambda row, name=alcohol: row["substance_1"] == name)  # type: ignore[misc]  # fmt: skip
+                          keep=only("substance_1", alcohol))  # fmt: skip
     mixture("ThermoMLArchive_alcohols", aqueous.head, rows)
 
     # Salt: molality becomes a mole fraction (water 0.018015268 kg/mol).
@@ -341,7 +346,7 @@ def pairs(folder: Path) -> None:
     table = Table(folder, "alkali_chloride_water_surface_tension")
     mixture("AlkaliChlorideTables", table.head,
             pair_rows(table, salt, "mass", "mass_fraction_salt",
-                      keep=lambda row: row["salt"] == "NaCl"))  # fmt: skip
+                      keep=only("salt", "NaCl")))  # fmt: skip
 
 
 if __name__ == "__main__":

@@ -137,8 +137,6 @@ class NumbersSheet:
     def __eq__(self, other: object) -> bool:
         return isinstance(other, NumbersSheet) and other.to_dict() == self.to_dict()
 
-    __hash__ = None  # type: ignore[assignment] # values may be arrays
-
     def __getitem__(self, key: str) -> Any:
         for row in self.rows:
             if row.key == key:

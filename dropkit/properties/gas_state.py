@@ -85,8 +85,6 @@ class Air(Traced):
     def __eq__(self, other: object) -> bool:
         return isinstance(other, Air) and other.to_dict() == self.to_dict()
 
-    __hash__ = None  # type: ignore[assignment] # values may be arrays
-
     # ------------------------------------------------ how it was asked
     def si(self) -> Air:
         """The same air giving SI floats and arrays.

@@ -7,8 +7,9 @@ from typing import TYPE_CHECKING, Any
 
 from dropkit import units
 from dropkit.properties.evaluation import Evaluation
-from dropkit.properties.property_words import GRADED, property_name
-from dropkit.provenance import Grade, Trail, worst_grade
+from dropkit.properties.property_words import property_name
+from dropkit.properties.traced import Traced
+from dropkit.provenance import Trail
 from dropkit.validity import Outside, Range, check_outside
 
 if TYPE_CHECKING:
@@ -18,7 +19,7 @@ if TYPE_CHECKING:
 __all__ = ["Fluid"]
 
 
-class Fluid(Evaluation):
+class Fluid(Evaluation, Traced):
     """Base of liquids, mixtures and users' fluids.
 
     Every property is a method of temperature [K, or with a unit]: floats and arrays
@@ -30,35 +31,6 @@ class Fluid(Evaluation):
         return self
 
     # ------------------------------------------------ what it rests on
-    def grade(self, prop: str | None = None) -> Grade:
-        """The grade of a property, or the worst of density, viscosity and surface tension.
-
-        Parameters
-        ----------
-        prop : str, optional
-            A property such as ``"viscosity"``.
-
-        Returns
-        -------
-        str
-            One of `dropkit.provenance.GRADES`, which says what each means.
-
-        Raises
-        ------
-        UnknownName, MissingProperty
-            No property is called so; the fluid does not have it.
-
-        Examples
-        --------
-        >>> import dropkit as dk
-        >>> dk.liquid("water").grade("viscosity")
-        'reference'
-        """
-        if prop is not None:
-            return self.trail(prop).grade
-        held = [self._trail(name, None).grade for name in GRADED if name in self.available()]
-        return worst_grade(held) if held else "estimated"
-
     def range(self, prop: str) -> Range:
         """The stated temperature range [K] of a property.
 

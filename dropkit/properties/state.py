@@ -89,8 +89,6 @@ class State(PropertyAttributes, Traced):
     def __eq__(self, other: object) -> bool:
         return isinstance(other, State) and other.to_dict() == self.to_dict()
 
-    __hash__ = None  # type: ignore[assignment] # values may be arrays
-
     # ------------------------------------------------ how it was asked
     def si(self) -> State:
         """The same state giving SI floats and arrays.

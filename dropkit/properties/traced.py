@@ -1,4 +1,4 @@
-"""What follows from the trails of numbers at one condition: grades and uncertainties."""
+"""What follows from the trails of numbers: grades and uncertainties."""
 
 from __future__ import annotations
 
@@ -9,7 +9,7 @@ __all__ = ["Traced"]
 
 
 class Traced:
-    """Numbers at one condition, each with the trail of how it was made."""
+    """Numbers, each with the trail of how it was made: of a fluid, or at one condition."""
 
     __slots__ = ()
 
@@ -34,7 +34,7 @@ class Traced:
         Returns
         -------
         Trail
-            At this condition.
+            Of its records, methods and cautions.
 
         Examples
         --------
