@@ -13,25 +13,35 @@ __version__ = VERSION
 if TYPE_CHECKING:
     from dropkit import errors, models, numbers, plots
     from dropkit.properties.catalogue import liquids
+    from dropkit.properties.choosing import choose
     from dropkit.properties.comparison import compare
     from dropkit.properties.frames import grid, lookup
     from dropkit.properties.gas import air
+    from dropkit.properties.interfacial import interfacial_tension, liquid_pair, liquid_pairs
     from dropkit.properties.mixtures import mixture
     from dropkit.properties.own import fluid
     from dropkit.properties.pure import liquid
+    from dropkit.properties.thickened_fluid import thickened
+    from dropkit.properties.thickening import thickener
     from dropkit.provenance import cite
 
 # Public name -> module that holds it; a name whose value is None is a module of its own.
 _HOMES: dict[str, str | None] = {
     "air": "dropkit.properties.gas",
+    "choose": "dropkit.properties.choosing",
     "cite": "dropkit.provenance",
     "compare": "dropkit.properties.comparison",
     "fluid": "dropkit.properties.own",
     "grid": "dropkit.properties.frames",
+    "interfacial_tension": "dropkit.properties.interfacial",
     "liquid": "dropkit.properties.pure",
+    "liquid_pair": "dropkit.properties.interfacial",
+    "liquid_pairs": "dropkit.properties.interfacial",
     "liquids": "dropkit.properties.catalogue",
     "lookup": "dropkit.properties.frames",
     "mixture": "dropkit.properties.mixtures",
+    "thickened": "dropkit.properties.thickened_fluid",
+    "thickener": "dropkit.properties.thickening",
     "errors": None,
     "models": None,
     "numbers": None,
@@ -40,18 +50,24 @@ _HOMES: dict[str, str | None] = {
 
 __all__ = [
     "air",
+    "choose",
     "cite",
     "compare",
     "errors",
     "fluid",
     "grid",
+    "interfacial_tension",
     "liquid",
+    "liquid_pair",
+    "liquid_pairs",
     "liquids",
     "lookup",
     "mixture",
     "models",
     "numbers",
     "plots",
+    "thickened",
+    "thickener",
 ]
 
 

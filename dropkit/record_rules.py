@@ -11,7 +11,14 @@ from typing import Final
 
 from dropkit.errors import nearest
 from dropkit.record_store import Store, parse_file
-from dropkit.record_types import LEADING, LiquidRecord, PairRecord, PropertyRecord
+from dropkit.record_types import (
+    INTERFACIAL,
+    LEADING,
+    LiquidRecord,
+    PairRecord,
+    PropertyRecord,
+    ThickenerRecord,
+)
 
 __all__ = ["ARCHIVE", "independent", "problems", "publication", "second_sources", "source_keys"]
 
@@ -19,6 +26,7 @@ __all__ = ["ARCHIVE", "independent", "problems", "publication", "second_sources"
 ARCHIVE: Final = "ThermoMLArchive"
 LEAST_RECALLED: Final = 0.05
 MEMORY: Final = "from memory"
+NEVER_ESTIMATED: Final = (*LEADING, INTERFACIAL)
 
 
 def publication(key: str) -> str:
@@ -66,7 +74,7 @@ def independent(store: Store, keys: Iterable[str]) -> list[set[str]]:
     return [members for _, members in groups]
 
 
-def source_keys(record: LiquidRecord | PairRecord) -> Iterator[tuple[str, str]]:
+def source_keys(record: LiquidRecord | PairRecord | ThickenerRecord) -> Iterator[tuple[str, str]]:
     """Where each source key of a record stands, and the key."""
     if isinstance(record, LiquidRecord):
         for name, fact in record.facts.items():
@@ -93,7 +101,7 @@ def _grade_problems(store: Store, block: PropertyRecord) -> Iterator[str]:
     own, second = list(block.sources), list(second_sources(block))
     if block.grade == "own":
         yield "grade 'own' is for results, not for data files"
-    if block.grade == "estimated" and block.property in LEADING:
+    if block.grade == "estimated" and block.property in NEVER_ESTIMATED:
         yield f"{block.property} is never estimated in a data file: leave it out"
     if block.grade == "measured":
         if not second:
@@ -120,14 +128,31 @@ def _grade_problems(store: Store, block: PropertyRecord) -> Iterator[str]:
                 yield f"grade '{block.grade}' rests on {key}, which is from memory"
 
 
-def problems(store: Store, record: LiquidRecord | PairRecord) -> list[str]:
+def _is_solute(store: Store, key: str) -> bool:
+    return bool(parse_file(store.root, f"liquids/{key}.toml").get("kind") == "solute")
+
+
+def _boiled_away(record: LiquidRecord) -> Iterator[str]:
+    """A liquid known only above its boiling point must say that pressure keeps it liquid."""
+    boils = record.boiling_point
+    lows = [b.range.low for name in LEADING for b in record.properties.get(name, ())]
+    if boils is None or not lows or min(lows) <= boils:
+        return
+    if not any("pressure" in caution for caution in record.cautions):
+        yield (
+            f"cautions: nothing is known of the liquid below its boiling point ({boils:g} K), so "
+            "a caution must say that it stays liquid under its own vapour pressure only"
+        )
+
+
+def problems(store: Store, record: LiquidRecord | PairRecord | ThickenerRecord) -> list[str]:
     """What is wrong with a record beyond the format of its file.
 
     Parameters
     ----------
     store : Store
         The data folder.
-    record : LiquidRecord or PairRecord
+    record : LiquidRecord, PairRecord or ThickenerRecord
         The record.
 
     Returns
@@ -146,6 +171,10 @@ def problems(store: Store, record: LiquidRecord | PairRecord) -> list[str]:
         for key in record.components:
             if key not in store.stems("liquids"):
                 found.append(f"components: there is no data/liquids/{key}.toml")
+            elif INTERFACIAL in record.properties and _is_solute(store, key):
+                found.append(f"components: {key} is a solute, so it has no interface")
+    if isinstance(record, LiquidRecord):
+        found.extend(_boiled_away(record))
     for blocks in record.properties.values():
         for block in blocks:
             found.extend(f"{block.label}: {text}" for text in _grade_problems(store, block))

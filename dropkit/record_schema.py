@@ -11,11 +11,19 @@ from typing import Any, Final, NoReturn, TypeGuard, cast
 
 from dropkit.errors import RecordError, nearest
 from dropkit.provenance import GRADES, Grade, Source
-from dropkit.record_types import PROPERTIES, LiquidRecord, PairRecord, PropertyRecord, Table
+from dropkit.record_types import (
+    INTERFACIAL,
+    PROPERTIES,
+    LiquidRecord,
+    PairRecord,
+    PropertyRecord,
+    Table,
+)
 from dropkit.validity import Range
 
-__all__ = ["read_liquid", "read_pair", "read_source"]
+__all__ = ["read_interface", "read_liquid", "read_pair", "read_source"]
 
+AS_PUBLISHED: Final = "as published"
 KINDS_OF_RECORD: Final = ("liquid", "solute")
 
 _CONSTANTS: Final = (
@@ -26,6 +34,8 @@ _CONSTANTS: Final = (
     "critical_pressure",
     "critical_density",
     "flash_point",
+    "heat_of_fusion",
+    "solid_density",
 )
 _LIQUID_KEYS: Final = (
     "name",
@@ -193,6 +203,7 @@ def _block(reader: _Reader, label: str, name: str, *, pair: bool) -> PropertyRec
             reader.fail("uncertainty", f"is {uncertainty:g}", "a fraction, not percent")
     else:
         uncertainty = absolute / abs(checks[0]["value"])
+    home = reader.file.partition("/")[0]
     sources = reader.texts("sources")
     if not sources:
         reader.fail("sources", "is missing", "at least one source key: no source, no record")
@@ -208,12 +219,12 @@ def _block(reader: _Reader, label: str, name: str, *, pair: bool) -> PropertyRec
         grade=cast(Grade, reader.choice("grade", GRADES)),
         sources=sources,
         place=reader.text("place"),
-        obtained=reader.text("obtained"),
+        obtained=reader.text("obtained") if "obtained" in reader.data else AS_PUBLISHED,
         second=_second(reader.table("second")),
         left_out=_left_out(reader.table("left_out")),
-        checks=checks,
+        checks=tuple(_with_tolerance(check, uncertainty, absolute) for check in checks),
         cautions=reader.texts("cautions"),
-        points=reader.texts("points"),
+        points=tuple(n if "/" in n else f"{home}/{n}" for n in reader.texts("points")),
         reasons=Table(reasons),
     )
 
@@ -232,7 +243,7 @@ def _checks(reader: _Reader, limits: Range, *, pair: bool) -> tuple[Table, ...]:
         if not limits.holds(T):
             check.fail("T", f"is {T:g} K", f"inside the range, {limits}")
         check.number("value", lowest=0.0)
-        check.number("tolerance", lowest=0.0)
+        check.number("tolerance", lowest=0.0, required=False)
         check.text("source")
         check.text("place", "")
         if pair:
@@ -240,6 +251,12 @@ def _checks(reader: _Reader, limits: Range, *, pair: bool) -> tuple[Table, ...]:
             if not 0 <= fraction <= 1:
                 check.fail("fraction", f"is {fraction:g}", "a mass fraction, 0 to 1")
     return tuple(map(Table, rows))
+
+
+def _with_tolerance(check: Table, uncertainty: float, absolute: float | None) -> Table:
+    """A check with what it may be off: by itself, the 95 % band of its record."""
+    band = 2.0 * max(uncertainty, (absolute or 0.0) / check["value"])
+    return Table({"tolerance": band, **check})
 
 
 def _second(reader: _Reader | None) -> Table | None:
@@ -355,18 +372,55 @@ def read_pair(stem: str, data: Mapping[str, Any]) -> PairRecord:
     """
     reader = _Reader(f"mixtures/{stem}.toml", data)
     reader.only(("components", "seal", *PROPERTIES))
+    components = _components(reader, stem)
+    subject = f"mixtures/{stem}"
+    return PairRecord(
+        components=components,
+        properties=Table(
+            {name: _blocks(reader, subject, name, pair=True) for name in PROPERTIES if name in data}
+        ),
+    )
+
+
+def _components(reader: _Reader, stem: str) -> tuple[str, str]:
     components = reader.texts("components")
     if len(components) != 2 or not components[0] < components[1]:
         reader.fail("components", f"is {list(components)}", "two keys in alphabetical order")
     if "__".join(components) != stem:
         reader.fail("components", f"are {components}", f"those of the file's name, {stem}")
-    subject = f"mixtures/{stem}"
-    return PairRecord(
-        components=(components[0], components[1]),
-        properties=Table(
-            {name: _blocks(reader, subject, name, pair=True) for name in PROPERTIES if name in data}
-        ),
-    )
+    return components[0], components[1]
+
+
+def read_interface(stem: str, data: Mapping[str, Any]) -> PairRecord:
+    """Read the parsed file of two liquids in contact.
+
+    Parameters
+    ----------
+    stem : str
+        Name of the file without ``.toml``: both keys, alphabetical, joined by ``__``.
+    data : mapping
+        Its parsed content.
+
+    Returns
+    -------
+    PairRecord
+        The frozen record; its one property is the interfacial tension.
+
+    Raises
+    ------
+    RecordError
+        Naming file, key and what is wrong.
+    """
+    reader = _Reader(f"interfaces/{stem}.toml", data)
+    reader.only(("components", "seal", INTERFACIAL))
+    components = _components(reader, stem)
+    if INTERFACIAL not in data:
+        reader.fail(INTERFACIAL, "is missing", f"[[{INTERFACIAL}]] with double brackets")
+    blocks = _blocks(reader, f"interfaces/{stem}", INTERFACIAL, pair=False)
+    for number, block in enumerate(blocks, 1):
+        if block.mixture_range is not None:
+            reader.fail(f"{INTERFACIAL} {number}: mixture_range", "means nothing", "range alone")
+    return PairRecord(components=components, properties=Table({INTERFACIAL: blocks}))
 
 
 def read_source(key: str, data: Mapping[str, Any]) -> Source:

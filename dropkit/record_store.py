@@ -15,14 +15,26 @@ from typing import Any, Final, TypeVar
 
 from dropkit.errors import RecordError, UnknownName, nearest
 from dropkit.provenance import Source
-from dropkit.record_index import build_index, fold
-from dropkit.record_schema import read_liquid, read_pair, read_source
-from dropkit.record_types import LiquidRecord, PairRecord, Table
+from dropkit.record_index import build_index, build_selection, fold, read_selection
+from dropkit.record_schema import read_interface, read_liquid, read_pair, read_source
+from dropkit.record_thickeners import read_thickener
+from dropkit.record_types import LiquidRecord, PairRecord, Table, ThickenerRecord
 
-__all__ = ["AMBIGUOUS", "FORMAT", "INDEX", "LOCK", "MARKER", "Store", "parse_file", "seal_of"]
+__all__ = [
+    "AMBIGUOUS",
+    "FORMAT",
+    "INDEX",
+    "LOCK",
+    "MARKER",
+    "SELECTION",
+    "Store",
+    "parse_file",
+    "seal_of",
+]
 
 MARKER: Final = "dropkit-data.toml"
 INDEX: Final = "index.json"
+SELECTION: Final = "selection.json"
 AMBIGUOUS: Final = "ambiguous.toml"
 FORMAT: Final = 1
 
@@ -100,8 +112,11 @@ class Store:
         self.root = root
         self._liquids: dict[str, LiquidRecord] = {}
         self._pairs: dict[tuple[str, str], PairRecord | None] = {}
+        self._interfaces: dict[tuple[str, str], PairRecord | None] = {}
+        self._thickeners: dict[str, ThickenerRecord] = {}
         self._sources: dict[str, Source] = {}
         self._index: Mapping[str, Any] | None = None
+        self._selection: Mapping[str, Any] | None = None
         self._ambiguous: Mapping[str, Any] | None = None
         self._version: str | None = None
 
@@ -157,6 +172,11 @@ class Store:
                     self._liquids[key] = found
         return found
 
+    def adopt(self, record: LiquidRecord) -> None:
+        """Hold a record that no file gives, under its own key."""
+        with LOCK:
+            self._liquids.setdefault(record.key, record)
+
     def pair(self, first: str, second: str) -> PairRecord | None:
         """The record of a pair in any order, None where there is none."""
         pair = (first, second) if first < second else (second, first)
@@ -173,6 +193,32 @@ class Store:
                     else None
                 )
             return self._pairs[pair]
+
+    def interface(self, first: str, second: str) -> PairRecord | None:
+        """The record of two liquids in contact, in any order; None where there is none."""
+        pair = (first, second) if first < second else (second, first)
+        with LOCK:
+            if pair not in self._interfaces:
+                stem = "__".join(pair)
+                self._interfaces[pair] = (
+                    read_interface(stem, self.sealed("interfaces", stem))
+                    if self._holds("interfaces", stem)
+                    else None
+                )
+            return self._interfaces[pair]
+
+    def thickener(self, key: str) -> ThickenerRecord:
+        """The record of a dissolved polymer."""
+        with LOCK:
+            if key not in self._thickeners:
+                if not self._holds("thickeners", key):
+                    raise UnknownName(
+                        f"there is no record of a thickener '{key}'",
+                        allowed="the name of a file in data/thickeners, without .toml",
+                        choices=nearest(str(key), self.stems("thickeners")),
+                    )
+                self._thickeners[key] = read_thickener(key, self.sealed("thickeners", key))
+            return self._thickeners[key]
 
     def source(self, key: str) -> Source:
         """A publication."""
@@ -235,15 +281,41 @@ class Store:
         except (OSError, ValueError, LookupError, TypeError, AttributeError):
             return None
 
+    def selection(self) -> Mapping[str, Any]:
+        """What choosing needs of each liquid; read from the files where the table doesn't fit."""
+        found = self._selection
+        if found is None:
+            with LOCK:
+                if self._selection is None:
+                    held = self._read_selection()
+                    if held is None:
+                        liquids, _ = self._scan_folder("liquids", read_liquid)
+                        held = build_selection(liquids)["liquids"]
+                    self._selection = MappingProxyType(held)
+                found = self._selection
+        return found
+
+    def _read_selection(self) -> dict[str, Any] | None:
+        """The table as it was generated, if it is whole and made from the records of the index."""
+        try:
+            with open(os.path.join(self.root, SELECTION), "rb") as file:
+                return read_selection(file.read(), self.index()["records"])
+        except (OSError, ValueError, LookupError, TypeError, AttributeError):
+            return None
+
     def scan(self) -> dict[str, Any]:
         """The index made from the files; an unreadable one is found by its file's name only."""
+        return self.scan_all()[0]
+
+    def scan_all(self) -> tuple[dict[str, Any], dict[str, Any]]:
+        """Index and selection, both made from the files."""
         liquids, broken = self._scan_folder("liquids", read_liquid)
         mixtures, _ = self._scan_folder("mixtures", read_pair)
         content = build_index(liquids, mixtures, self.ambiguous())
         for stem in broken:
             # Asking for it then gives the file's own error.
             content["names"].setdefault(fold(stem), stem)
-        return content
+        return content, build_selection(liquids)
 
     def _scan_folder(
         self, folder: str, read: Callable[[str, Mapping[str, Any]], _Read]

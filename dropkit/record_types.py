@@ -9,7 +9,16 @@ from typing import Any, Final
 from dropkit.provenance import Grade, worst_grade
 from dropkit.validity import Range
 
-__all__ = ["LEADING", "PROPERTIES", "LiquidRecord", "PairRecord", "PropertyRecord", "Table"]
+__all__ = [
+    "INTERFACIAL",
+    "LEADING",
+    "PROPERTIES",
+    "LiquidRecord",
+    "PairRecord",
+    "PropertyRecord",
+    "Table",
+    "ThickenerRecord",
+]
 
 # Properties that a record can hold, in the order in which they are shown.
 PROPERTIES: Final[tuple[str, ...]] = (
@@ -28,6 +37,8 @@ PROPERTIES: Final[tuple[str, ...]] = (
 )
 # A liquid's grade is its worst grade of these.
 LEADING: Final = PROPERTIES[:3]
+# The one property of two liquids in contact.
+INTERFACIAL: Final = "interfacial_tension"
 
 
 class Table(Mapping[str, Any]):
@@ -187,7 +198,7 @@ class LiquidRecord:
 
 @dataclass(frozen=True, slots=True)
 class PairRecord:
-    """All that dropkit holds on a pair of liquids, or of a liquid and a solute.
+    """All that dropkit holds on a pair: a mixture of two, or two liquids in contact.
 
     Parameters
     ----------
@@ -198,4 +209,37 @@ class PairRecord:
     """
 
     components: tuple[str, str]
+    properties: Mapping[str, tuple[PropertyRecord, ...]]
+
+
+@dataclass(frozen=True, slots=True)
+class ThickenerRecord:
+    """All that dropkit holds on one dissolved polymer: what it does to a viscosity.
+
+    Parameters
+    ----------
+    key : str
+        Name of its file.
+    name, cas : str
+        Shown name, CAS number.
+    charge : str
+        ``"neutral"``, or ``"anionic"``: then its size depends on the salt beside it.
+    surface_active : bool
+        Whether it is taken to change the surface tension.
+    surface_reason : str
+        Why.
+    synonyms, cautions : tuple of str
+        Other names; shown with every solution.
+    properties : mapping
+        ``intrinsic_viscosity`` to its entries, each of one material and solvent.
+    """
+
+    key: str
+    name: str
+    cas: str
+    charge: str
+    surface_active: bool
+    surface_reason: str
+    synonyms: tuple[str, ...]
+    cautions: tuple[str, ...]
     properties: Mapping[str, tuple[PropertyRecord, ...]]

@@ -14,7 +14,13 @@ from dropkit.errors import RecordError
 from dropkit.provenance import Source
 from dropkit.record_index import fold
 from dropkit.record_store import LOCK, MARKER, Store
-from dropkit.record_types import LiquidRecord, PairRecord, PropertyRecord, Table
+from dropkit.record_types import (
+    LiquidRecord,
+    PairRecord,
+    PropertyRecord,
+    Table,
+    ThickenerRecord,
+)
 
 if TYPE_CHECKING:
     from pathlib import Path
@@ -26,16 +32,22 @@ __all__ = [
     "PropertyRecord",
     "Store",
     "Table",
+    "ThickenerRecord",
+    "adopt",
     "ambiguous_names",
     "data_dir",
     "data_version",
     "fold",
     "index",
+    "interface_record",
+    "interfaces",
     "liquid_record",
     "pair_record",
     "pairs",
+    "selection",
     "source",
     "summaries",
+    "thickener_records",
 ]
 
 _STORE: Store | None = None
@@ -138,6 +150,17 @@ def liquid_record(key: str) -> LiquidRecord:
     return _store().liquid(key)
 
 
+def adopt(record: LiquidRecord) -> None:
+    """Hold a record that no file gives, so that `liquid_record` finds it; for the engines.
+
+    Parameters
+    ----------
+    record : LiquidRecord
+        Its key must be no file's name: a CAS number.
+    """
+    _store().adopt(record)
+
+
 def pair_record(first: str, second: str) -> PairRecord | None:
     """All that the data hold on a pair.
 
@@ -162,6 +185,71 @@ def pair_record(first: str, second: str) -> PairRecord | None:
     ('glycerol', 'water')
     """
     return _store().pair(first, second)
+
+
+def interface_record(first: str, second: str) -> PairRecord | None:
+    """What the data hold on two liquids in contact: their interfacial tension.
+
+    Parameters
+    ----------
+    first, second : str
+        Keys of the liquids, in any order.
+
+    Returns
+    -------
+    PairRecord or None
+        None where the pair has no record.
+
+    Raises
+    ------
+    RecordError
+        If the file is unreadable, breaks the format, or has changed since it was sealed.
+
+    Examples
+    --------
+    >>> interface_record("water", "mercury").components
+    ('mercury', 'water')
+    """
+    return _store().interface(first, second)
+
+
+def interfaces() -> tuple[tuple[str, str], ...]:
+    """Pairs of liquids in contact that have a record, from the names of its files.
+
+    Returns
+    -------
+    tuple of tuple of str
+        Pairs of keys, each alphabetical, in order.
+
+    Examples
+    --------
+    >>> ("mercury", "water") in interfaces()
+    True
+    """
+    stems = sorted(_store().stems("interfaces"))
+    return tuple((first, second) for first, _, second in (s.partition("__") for s in stems))
+
+
+def thickener_records() -> Mapping[str, ThickenerRecord]:
+    """All that the data hold on dissolved polymers; their files are few and small.
+
+    Returns
+    -------
+    mapping of str to ThickenerRecord
+        By key, in alphabetical order.
+
+    Raises
+    ------
+    RecordError
+        If a file is unreadable, breaks the format, or has changed since it was sealed.
+
+    Examples
+    --------
+    >>> thickener_records()["sodium_alginate"].charge
+    'anionic'
+    """
+    store = _store()
+    return {key: store.thickener(key) for key in sorted(store.stems("thickeners"))}
 
 
 def source(key: str) -> Source:
@@ -215,8 +303,34 @@ def summaries() -> Mapping[str, Mapping[str, Any]]:
     -------
     mapping of str to mapping
         Key to name, cas, formula, family, kind, grade, synonyms and properties (with grades).
+
+    Examples
+    --------
+    >>> summaries()["water"]["family"]
+    'water'
     """
     return cast(Mapping[str, Mapping[str, Any]], _store().index()["liquids"])
+
+
+def selection() -> Mapping[str, Mapping[str, Any]]:
+    """Constants and equations of every liquid in short form, without reading its file.
+
+    Returns
+    -------
+    mapping of str to mapping
+        Key to what `dropkit.record_index.build_selection` says of it; solutes are left out.
+
+    Raises
+    ------
+    RecordError
+        If two records share a name.
+
+    Examples
+    --------
+    >>> selection()["water"]["constants"]["boiling_point"]
+    373.124
+    """
+    return _store().selection()
 
 
 def pairs() -> Mapping[tuple[str, str], Mapping[str, str]]:

@@ -1,30 +1,45 @@
 """The commands ``python -m dropkit.records seal`` and ``check``.
 
 ``seal [names]`` checks files (all of them without names), writes the checksum of each good one
-into its ``seal`` line, and rewrites ``data/index.json``. ``check [names]`` does the same without
-writing, and also reports seals that don't hold. Both end with 1 where something is wrong.
+into its ``seal`` line, and rewrites ``data/index.json`` and ``data/selection.json``.
+``check [names]`` does the same without writing, and also reports seals that don't hold. Both end
+with 1 where something is wrong.
 """
 
 from __future__ import annotations
 
-import json
 import os
 import re
 import sys
 import tomllib
-from collections.abc import Sequence
+from collections.abc import Callable, Mapping, Sequence
 from pathlib import Path
-from typing import Final
+from typing import Any, Final, TypeAlias
 
 from dropkit.errors import RecordError, nearest
+from dropkit.record_index import index_text, selection_text
 from dropkit.record_rules import problems
-from dropkit.record_schema import read_liquid, read_pair
-from dropkit.record_store import INDEX, Store, parse_file, seal_of
+from dropkit.record_schema import read_interface, read_liquid, read_pair
+from dropkit.record_store import (
+    INDEX,
+    SELECTION,
+    Store,
+    parse_file,
+    seal_of,
+)
+from dropkit.record_thickeners import read_thickener
+from dropkit.record_types import LiquidRecord, PairRecord, ThickenerRecord
 from dropkit.records import data_dir
 
 __all__ = ["main", "sealed_text"]
 
-FOLDERS: Final = ("liquids", "mixtures")
+Record: TypeAlias = LiquidRecord | PairRecord | ThickenerRecord
+READERS: Final[dict[str, Callable[[str, Mapping[str, Any]], Record]]] = {
+    "liquids": read_liquid,
+    "mixtures": read_pair,
+    "interfaces": read_interface,
+    "thickeners": read_thickener,
+}
 
 _SEAL_LINE: Final = re.compile(r"^seal[ \t]*=[^\r\n]*", re.MULTILINE)
 # The first table, with the blank lines and comments that lead to it.
@@ -80,7 +95,7 @@ class _Run:
 
     def chosen(self, names: Sequence[str]) -> list[tuple[str, str]]:
         """The files that some names mean: keys, pairs ``a__b``, or ``liquids/key``."""
-        files = [(f, stem) for f in FOLDERS for stem in sorted(self.store.stems(f))]
+        files = [(f, stem) for f in READERS for stem in sorted(self.store.stems(f))]
         if not names:
             return files
         found = []
@@ -91,7 +106,7 @@ class _Run:
             if not hits:
                 near = nearest(plain, [stem for _, stem in files], 1)
                 guess = f"; did you mean {near[0]}?" if near else ""
-                self.bad.append(f"{name}: no such file in data/liquids or data/mixtures{guess}")
+                self.bad.append(f"{name}: no such file in data/{', data/'.join(READERS)}{guess}")
         return found
 
     def file(self, folder: str, stem: str) -> None:
@@ -99,8 +114,7 @@ class _Run:
         name = f"{folder}/{stem}.toml"
         try:
             data = parse_file(self.store.root, name)
-            read = read_liquid if folder == "liquids" else read_pair
-            found = problems(self.store, read(stem, data))
+            found = problems(self.store, READERS[folder](stem, data))
         except RecordError as error:
             self.bad.append(str(error))
             return
@@ -122,22 +136,25 @@ class _Run:
             )
 
     def index(self) -> None:
-        """Compare the index with the files, and rewrite it where that is the command."""
+        """Compare the generated files with the others, and rewrite them if that is the command."""
         try:
-            content = self.store.scan()
+            content, selection = self.store.scan_all()
         except RecordError as error:
             self.bad.append(str(error))
             return
-        path = Path(self.store.root, INDEX)
-        text = json.dumps(content, indent=1, ensure_ascii=False, sort_keys=True) + "\n"
-        if path.is_file() and path.read_text(encoding="utf-8") == text:
-            return
-        if self.write:
-            _replace(path, text)
-        else:
-            self.bad.append(
-                "data/index.json does not match the files; run: python -m dropkit.records seal"
-            )
+        for name, text in (
+            (INDEX, index_text(content)),
+            (SELECTION, selection_text(selection)),
+        ):
+            path = Path(self.store.root, name)
+            if path.is_file() and path.read_text(encoding="utf-8") == text:
+                continue
+            if self.write:
+                _replace(path, text)
+            else:
+                self.bad.append(
+                    f"data/{name} does not match the files; run: python -m dropkit.records seal"
+                )
 
 
 def _replace(path: Path, text: str) -> None:

@@ -103,6 +103,8 @@ PREFIXED: Final[dict[str, tuple[Unit, str]]] = {
     "St": (Unit(Fraction(1, 10000), DIFFUSIVITY), "stokes"),
     "Pas": (Unit(Fraction(1), VISCOSITY), ""),
     "bar": (Unit(Fraction(100000), PRESSURE), "bar"),
+    # Named for a mass, but polymers are sold by it: the molar mass of one such unit.
+    "Da": (Unit(_MILLI, (0, 1, 0, 0, 0, -1)), ""),
     "ohm": (Unit(Fraction(1), (2, 1, -3, -2, 0, 0)), "ohm"),
 }
 

@@ -430,4 +430,8 @@ def give(si: Any, kind: str | Kind, asked: Asked | None) -> Any:
         return si
     registry = asked.registry or _application()
     scale, label = _stock(its)
+    for name in label:
+        # A registry learns a prefixed unit when it first meets it, and formats only what it knows.
+        if name not in registry._units:
+            registry.get_name(name)
     return registry.Quantity(scale.back(si), label)

@@ -239,12 +239,33 @@ BROKEN = [
     ('obtained = "fitted here to 3 points"', 'obtained = " "', "obtained: is ' '"),
     ("checks = [{ T = 300.0, value = 1000.1", "chekcs = [{ T = 300.0, value = 1000.1", "no check"),
     ("checks = [{ T = 300.0,", "checks = [{ T = 420.0,", "check 1: T: is 420 K"),
-    (", tolerance = 0.001 }]", "}]", "check 1: tolerance: is missing"),
+    (", tolerance = 0.001 }]", ", tolerance = 0 }]", "check 1: tolerance: is 0"),
     ('source = "Cook1903", place', "place", "check 1: source: is missing"),
     ("checks = [{ T = 300.0,", "checks = [{ T = 300.0, p = 1,", "check 1: p: is not known"),
     ("median = 0.0001, ", "", "second: median: is missing"),
     ('how = "source Baker1902 left out", ', "", "left_out: how: is missing"),
 ]
+
+
+@pytest.mark.parametrize(
+    ("stated", "expected"),
+    [
+        ("uncertainty = 0.001", 0.002),
+        ("uncertainty = 0.001\nuncertainty_absolute = 3.0", 6.0 / 1000.1),
+        ("uncertainty_absolute = 3.0", 6.0 / 1000.1),
+    ],
+)
+def test_what_a_block_may_leave_out(folder: Path, stated: str, expected: float) -> None:
+    name = "liquids/alpha.toml"
+    made_up.edit(folder, name, "uncertainty = 0.001", stated)
+    made_up.edit(folder, name, ', place = "Table 2", tolerance = 0.001 }]', " }]")
+    made_up.edit(folder, name, 'obtained = "fitted here to 3 points"\n', "")
+    made_up.edit(folder, name, '["liquids/Able1901"]', '["Able1901", "mixtures/Able1901"]')
+    made_up.reseal(folder, name)
+    density = Store(str(folder)).liquid("alpha").properties["density"][0]
+    assert density.obtained == "as published"
+    assert density.points == ("liquids/Able1901", "mixtures/Able1901")
+    assert density.checks[0]["tolerance"] == pytest.approx(expected, rel=1e-12)
 
 
 @pytest.mark.parametrize(("old", "new", "message"), BROKEN)

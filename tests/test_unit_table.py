@@ -159,9 +159,10 @@ def test_units_that_pint_lacks_or_gets_wrong(word: str) -> None:
 
 def test_every_unit_without_a_long_name_is_checked() -> None:
     nameless = {word for word, (_, name) in LABELLED.items() if not name}
-    assert nameless - {"Pas"} <= {*DEFINED, "Torr", "LPM"}
+    assert nameless - {"Pas", "Da"} <= {*DEFINED, "Torr", "LPM"}
     assert SINGLE["Torr"] == SINGLE["torr"]
     assert SINGLE["LPM"] == SINGLE["lpm"]
+    assert read("1 kDa", "molar_mass", "x")[0] == read("1 kg/mol", "molar_mass", "x")[0] == 1.0
 
 
 @pytest.mark.parametrize("prefix", PREFIXES)
@@ -254,7 +255,8 @@ def test_the_page_names_no_unit_that_is_not_read() -> None:
                 unit in WHOLE or unit in SINGLE or unit in REFUSED or unit in ("30 G", "30 gauge")
             )
             if not known:
-                kinds = ("viscosity", "kinematic_viscosity", "flow", "density", "temperature")
+                kinds = ("viscosity", "kinematic_viscosity", "flow", "density", "temperature",
+                         "molar_mass")  # fmt: skip
                 assert any(readable(f"1 {unit}", kind) for kind in kinds), unit
 
 

@@ -16,6 +16,8 @@ from collections.abc import Callable, Iterable
 from decimal import Decimal
 from pathlib import Path
 
+from compact_points import compact
+
 PUBLISHED = Path(__file__).resolve().parents[1] / "published"
 KEYS = {
     "glycerol": "glycerol",
@@ -74,6 +76,7 @@ def _write(path: Path, head: Iterable[str], columns: list[str], rows: list[list[
         writer = csv.writer(handle, lineterminator="\n")
         writer.writerow(columns)
         writer.writerows(unique)
+    compact(path)
 
 
 def pure(key: str, head: Iterable[str], rows: list[list[str]]) -> None:

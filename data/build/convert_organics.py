@@ -13,12 +13,15 @@ from __future__ import annotations
 import csv
 import importlib.util
 import math
+import re
 import sys
 from collections.abc import Callable, Iterable, Sequence
 from decimal import Decimal
 from functools import cache
 from pathlib import Path
 from typing import Any
+
+from compact_points import compact
 
 HERE = Path(__file__).resolve().parent
 PUBLISHED = HERE.parent / "published"
@@ -150,6 +153,7 @@ def write(source: str, head: Iterable[str], rows: Iterable[Sequence[str]]) -> No
         writer = csv.writer(handle, lineterminator="\n")
         writer.writerow(LIQUID)
         writer.writerows(unique)
+    compact(path)
 
 
 def atmospheric(row: Row) -> bool:
@@ -235,10 +239,16 @@ def jasper(folder: Path) -> None:
     write("Jasper1972", [*head[:3], note], rows)
 
 
+DEGREES = {
+    "15": "288.15", "18": "291.15", "19": "292.15", "2": "293.15", "24": "297.15", "25": "298.15",
+}  # fmt: skip
+
+
 def crc(folder: Path) -> None:
     """Spots and equations of the CRC handbook."""
     _, spots = reference(folder, "pure_density_crc")
     rows = wide(spots, "spot")
+    known = {row[0] for row in rows}
     constants = table_csv("Misc", "Physical Constants of Organic Compounds.csv")
     refraction = table_csv("Misc", "CRC Handbook Organic RI.csv")
     permittivity = table("Electrolytes", "Permittivity (Dielectric Constant) of Liquids.tsv")
@@ -247,6 +257,11 @@ def crc(folder: Path) -> None:
         "Heat Capacity", "CRC Standard Thermodynamic Properties of Chemical Substances.tsv"
     )
     for key, cas in CAS.items():
+        row = constants.get(cas)
+        # 0.9420 with the superscript 20 stands as 942.02: four decimals, then the temperature.
+        spot = re.fullmatch(r"(\d{3,4}\.\d)(\d{1,2})", row["rho"]) if row and row["rho"] else None
+        if spot and key not in known and spot[2] in DEGREES:
+            rows.append([key, "density", DEGREES[spot[2]], spot[1], "spot"])
         row = refraction.get(cas)
         if row and row["RI"]:
             T = row["RIT"] or "293.15"
@@ -552,8 +567,6 @@ RINGS = {
 
 
 def atoms(formula: str) -> dict[str, int]:
-    import re
-
     return {
         element: int(count or 1) for element, count in re.findall(r"([A-Z][a-z]?)(\d*)", formula)
     }

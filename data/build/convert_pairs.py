@@ -14,6 +14,7 @@ from collections.abc import Iterable, Mapping, Sequence
 from decimal import Decimal
 from pathlib import Path
 
+from compact_points import compact
 from convert_organics import KEYS, PUBLISHED, QUANTITIES, Row, reference
 
 MIXTURE = ["component_1", "component_2", "basis", "fraction_1", "T_K", "property", "value", "doi"]
@@ -56,6 +57,7 @@ def write(source: str, head: Iterable[str], rows: Iterable[Sequence[str]]) -> No
         writer = csv.writer(handle, lineterminator="\n")
         writer.writerow(MIXTURE)
         writer.writerows(unique)
+    compact(path)
 
 
 def archive(folder: Path) -> None:
@@ -106,7 +108,7 @@ def single(
     head, table = reference(folder, name)
     rows = []
     for row in table:
-        basis = column.split("_")[0]
+        basis = column.split("_")[0].replace("composition", "mole")
         fraction = row[column]
         if row.get("composition_type", "mole_fraction") != "mole_fraction":
             if row["composition_type"] != "mass_fraction":
@@ -120,7 +122,7 @@ def single(
             if row.get(unit) and prop not in skip:
                 T = row.get("T_K") or "298.15"
                 rows.append(
-                    oriented(first, second, basis.removeprefix("composition"), fraction, T, prop,
+                    oriented(first, second, basis, fraction, T, prop,
                              row[unit], row.get("doi") or dois.get(prop, ""))
                 )  # fmt: skip
     return source, head, rows

@@ -16,6 +16,7 @@ from decimal import Decimal
 from pathlib import Path
 from typing import Any
 
+from compact_points import compact
 from solvent_equations import EQUATIONS, hexadecane_rows
 
 PUBLISHED = Path(__file__).resolve().parents[1] / "published"
@@ -65,6 +66,7 @@ def _write(kind: str, key: str, head: Iterable[str], rows: Iterable[list[str]]) 
         writer = csv.writer(handle, lineterminator="\n")
         writer.writerow(LIQUID if kind == "liquids" else MIXTURE)
         writer.writerows(unique)
+    compact(path)
 
 
 def _wide(table: Table, source: Callable[[Row], str] = lambda row: "") -> list[list[str]]:

@@ -14,6 +14,8 @@ import sys
 from collections.abc import Callable, Iterable
 from pathlib import Path
 
+from compact_points import compact
+
 PUBLISHED = Path(__file__).resolve().parents[1] / "published" / "liquids"
 QUANTITIES = {
     "density_kg_m3": "density",
@@ -37,11 +39,13 @@ def read(path: Path) -> tuple[list[str], list[Row]]:
 
 def write(name: str, comments: Iterable[str], rows: Iterable[tuple[str, ...]]) -> None:
     """One long-format file of pure liquids."""
-    with (PUBLISHED / f"{name}.csv").open("w", encoding="utf-8", newline="") as handle:
+    path = PUBLISHED / f"{name}.csv"
+    with path.open("w", encoding="utf-8", newline="") as handle:
         handle.writelines(f"{line}\n" for line in comments)
         writer = csv.writer(handle, lineterminator="\n")
         writer.writerow(["liquid", "property", "T_K", "value", "doi"])
         writer.writerows(rows)
+    compact(path)
 
 
 def wide(name: str, source: Path, liquid: str, chosen: Callable[[Row], bool]) -> None:

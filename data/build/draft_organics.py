@@ -10,7 +10,6 @@ FOLDER holds the reference tables (for flash points). A draft is where the judgi
 
 from __future__ import annotations
 
-import csv
 import json
 import math
 import sys
@@ -202,8 +201,9 @@ def viscosity(key: str) -> Iterator[Block]:
         ("BellThermo2023", points("BellThermo2023", key, "viscosity"), {}),
         ("Lemmon2018", points("Lemmon2018", key, "viscosity"), {}),
         (
+            # Some of its rows are corrupt: of use only where the others are few.
             "ViswanathNatarajan1989",
-            [] if book else points("ViswanathNatarajan1989", key, "viscosity"),
+            [] if book or (vdi and perry) else points("ViswanathNatarajan1989", key, "viscosity"),
             {},
         ),
     ):
@@ -597,8 +597,9 @@ RULES = {
 
 
 def judged(subject: Liquid, prop: str, key: str) -> tuple[Block | None, str]:
-    """The first candidate that earns a good grade, else the first that stands as single."""
+    """Of the candidates that earn a good grade the surest that is wide; else the first single."""
     against: list[str] = []
+    good: list[tuple[float, float, Block, str]] = []
     fallback: tuple[Block, str] | None = None
     for block in RULES[prop](key):
         try:
@@ -606,8 +607,12 @@ def judged(subject: Liquid, prop: str, key: str) -> tuple[Block | None, str]:
         except (BuildError, ValueError, np.linalg.LinAlgError) as error:
             against.append(str(error))
         else:
-            if built.record["grade"] in ("reference", "measured", "estimated"):
-                return block, f"{built.record['grade']} {100 * built.record['uncertainty']:.2g} %"
+            grade, u = built.record["grade"], built.record["uncertainty"]
+            if grade in ("reference", "measured", "estimated"):
+                words = f"{grade} {100 * u:.2g} %"
+                if grade != "measured" or prop not in ("density", "viscosity", "surface_tension"):
+                    return block, words
+                good.append((u, block["range"][1] - block["range"][0], block, words))
             fallback = fallback or (block, "single")
             continue
         if fallback is None and block.get("grade") != "reference":
@@ -618,7 +623,26 @@ def judged(subject: Liquid, prop: str, key: str) -> tuple[Block | None, str]:
             except (BuildError, ValueError, np.linalg.LinAlgError) as error:
                 against.append(str(error))
             else:
-                fallback = (alone, f"single {100 * built.record['uncertainty']:.2g} %: {reason}")
+                u = built.record["uncertainty"]
+                if u < 0.06:
+                    fallback = (alone, f"single {100 * u:.2g} %: {reason}")
+    if good:
+        # Handbooks that agree with each other weigh less than papers that scatter.
+        archive = organics("ThermoMLArchive")
+        with_papers = [
+            entry
+            for entry in good
+            if any(
+                one["file"] == archive
+                for role in ("fit", "second")
+                for one in entry[2].get(role, [])
+            )
+        ]
+        good = with_papers or good
+        widest = max(width for _, width, _, _ in good)
+        wide = [entry for entry in good if entry[1] >= 0.4 * widest]
+        least = min(u for u, _, _, _ in wide)
+        return next((block, words) for u, _, block, words in wide if u <= 1.3 * least)
     return fallback or (None, "; ".join(against[:2]))
 
 

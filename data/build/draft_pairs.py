@@ -9,7 +9,6 @@ records are the ends. A pair with density alone is drafted too, but is no fitted
 
 from __future__ import annotations
 
-import csv
 import sys
 from collections import defaultdict
 from pathlib import Path
@@ -22,6 +21,8 @@ from record_builder.blocks import Built, build_block
 from record_builder.points import Published
 from record_builder.subjects import Pair
 
+from dropkit.published_rows import published_file
+
 DATA = Path(__file__).resolve().parent.parent
 PUBLISHED = Published(DATA / "published")
 PROPERTIES = ("density", "viscosity", "surface_tension", "refractive_index")
@@ -32,13 +33,11 @@ def files() -> dict[str, dict[str, list[str]]]:
     """Pair -> property -> files that hold points of it."""
     found: dict[str, dict[str, list[str]]] = defaultdict(lambda: defaultdict(list))
     for path in sorted((DATA / "published" / "mixtures").glob("*.csv")):
-        with path.open(encoding="utf-8", newline="") as handle:
-            lines = (line for line in handle if not line.startswith("#") and line.strip())
-            for row in csv.DictReader(lines):
-                pair = f"{row['component_1']}__{row['component_2']}"
-                name = f"mixtures/{path.stem}"
-                if name not in found[pair][row["property"]]:
-                    found[pair][row["property"]].append(name)
+        for row in published_file(path):
+            pair = f"{row['component_1']}__{row['component_2']}"
+            name = f"mixtures/{path.stem}"
+            if name not in found[pair][row["property"]]:
+                found[pair][row["property"]].append(name)
     return found
 
 
@@ -87,6 +86,13 @@ def best(pair: Pair, prop: str, names: list[str]) -> tuple[dict[str, Any] | None
                 if "single" in block:
                     continue
                 block |= {"single": True, "single_reason": against.split(": ", 2)[-1]}
+                try:
+                    built = build_block(pair, prop, block, PUBLISHED)
+                except (BuildError, ValueError, np.linalg.LinAlgError) as again:
+                    against = str(again)
+                    continue
+            if "left_out" not in built.record:  # no source can be spared
+                block["left_out"] = "every fifth"
                 try:
                     built = build_block(pair, prop, block, PUBLISHED)
                 except (BuildError, ValueError, np.linalg.LinAlgError) as again:

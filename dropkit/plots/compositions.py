@@ -10,9 +10,9 @@ from dropkit import units
 from dropkit.errors import BadInput
 from dropkit.plots.axes import axes_or_new, label, markers
 from dropkit.properties import display
-from dropkit.properties.catalogue import resolve
 from dropkit.properties.composition import Composition, check_basis, from_mass, to_mass
 from dropkit.properties.mixtures import Mixture
+from dropkit.properties.other_chemicals import key_of
 from dropkit.properties.points import pair_points
 from dropkit.properties.property_words import property_name
 
@@ -75,7 +75,7 @@ def property_over_composition(
     """
     property_name(property)
     check_basis(by)
-    keys = (resolve(first), resolve(second))
+    keys = (key_of(first), key_of(second))
     if keys[0] == keys[1]:
         raise BadInput(f"{first} and {second} are the same", allowed="two components")
     axes = axes_or_new(ax)

@@ -3,17 +3,25 @@
 from __future__ import annotations
 
 from collections.abc import Mapping, Sequence
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 from typing import Any, Final
 
 import numpy as np
 
 from dropkit import records, units
 from dropkit.errors import BadInput, BasisMissing, CompositionError, UnitError
-from dropkit.properties.catalogue import resolve
 from dropkit.properties.curves import Curve
+from dropkit.properties.other_chemicals import awake, key_of
 
-__all__ = ["BASES", "Composition", "from_mass", "read_composition", "reference_density", "to_mass"]
+__all__ = [
+    "BASES",
+    "Composition",
+    "awoken",
+    "from_mass",
+    "read_composition",
+    "reference_density",
+    "to_mass",
+]
 
 BASES: Final = ("mass", "mole", "volume")
 # Amounts of these kinds fix the basis; percentages and bare numbers are fractions.
@@ -46,6 +54,14 @@ class Composition:
     def shape(self) -> tuple[int, ...]:
         """() for one composition, else the shape of the arrays."""
         return np.shape(self.fractions[0])
+
+
+def awoken(composition: Composition) -> Composition:
+    """One that was pickled, with the records of its components to be found here."""
+    keys = tuple(map(awake, composition.keys))
+    if keys == composition.keys:
+        return composition
+    return replace(composition, keys=keys, rest=awake(composition.rest))
 
 
 def reference_density(key: str, temperature: float = 293.15) -> float:
@@ -208,7 +224,7 @@ def _key(name: Any) -> str:
             f"A component is named by text or is a liquid of dropkit, not {type(name).__name__}",
             hint="A fluid of your own has no composition data; use with_values() on a mixture",
         )
-    return resolve(key)
+    return key_of(key)
 
 
 def _read_amount(key: str, value: Any) -> tuple[Any, str]:

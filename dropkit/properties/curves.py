@@ -14,7 +14,7 @@ from typing import Any, NamedTuple, TypeAlias
 import numpy as np
 
 from dropkit.errors import RecordError
-from dropkit.properties.equations import FORMS
+from dropkit.properties.equations import FORMS, ArrayBody, ScalarBody
 from dropkit.records import PropertyRecord
 from dropkit.validity import Range
 
@@ -60,8 +60,9 @@ class Curve:
             for record in records
         )
         self.range = _union(self.records, self.ranges)
-        self._scalars = [FORMS[r.form].scalar(r.parameters) for r in records]
-        self._arrays = [FORMS[r.form].array(r.parameters) for r in records]
+        bodies = [_bodies(record) for record in records]
+        self._scalars = [scalar for scalar, _ in bodies]
+        self._arrays = [array for _, array in bodies]
         ends = sorted({end for limits in self.ranges for end in (limits.low, limits.high)})
         middles = [0.5 * (a + b) for a, b in pairwise(ends)]
         self._ends = np.array(ends)
@@ -79,6 +80,11 @@ class Curve:
     def fast(self) -> Fast:
         """Ends of the range and the scalar evaluator."""
         return Fast(self.range.low, self.range.high, self.scalar)
+
+    @property
+    def by_engine(self) -> bool:
+        """Whether an engine, not an equation held here, gives some of it."""
+        return any("engine" in record.parameters for record in self.records)
 
     def serving(self, temperature: float) -> int:
         """Which record serves a temperature.
@@ -181,6 +187,17 @@ def stepwise(
         return math.nan
 
     return value
+
+
+def _bodies(record: PropertyRecord) -> tuple[ScalarBody, ArrayBody]:
+    """The evaluators of a record: of its equation, or of the engine that it names."""
+    if "engine" in record.parameters:
+        # Imported here: only what dropkit has no record of needs the engines.
+        from dropkit.properties.engines import engine_bodies
+
+        return engine_bodies(record)
+    form = FORMS[record.form]
+    return form.scalar(record.parameters), form.array(record.parameters)
 
 
 def _union(records: Sequence[PropertyRecord], ranges: Sequence[Range]) -> Range:

@@ -10,7 +10,6 @@ import numpy as np
 
 from dropkit import records, units
 from dropkit.errors import BadInput, CompositionError, DropkitError, UnknownName, nearest
-from dropkit.properties.catalogue import resolve
 from dropkit.properties.composition import (
     BASES,
     Composition,
@@ -20,6 +19,7 @@ from dropkit.properties.composition import (
 )
 from dropkit.properties.curves import FloatArray
 from dropkit.properties.mixtures import Mixture
+from dropkit.properties.other_chemicals import key_of
 
 if TYPE_CHECKING:
     import pandas as pd
@@ -28,6 +28,8 @@ __all__ = ["Table", "tell"]
 
 _HEADER: Final = re.compile(r"^\s*(?P<name>.+?)\s*[\[(]\s*(?P<unit>[^\[\]()]+?)\s*[\])]\s*$")
 _TEMPERATURE: Final = ("temperature", "t")
+# Likeness of a header to a name, from 0 to 1, from which it counts as misspelt.
+_MISSPELT: Final = 0.8
 # Units of a header that fix the basis of a fraction.
 _PERCENT: Final = {
     "%": None, "wt%": "mass", "wt %": "mass", "mass%": "mass", "mass %": "mass", "%w/w": "mass",
@@ -105,7 +107,7 @@ class Table:
         self, columns: Mapping[str, tuple[FloatArray, str | None]], by: str | None, rest: str | None
     ) -> None:
         if rest is not None:
-            rest = resolve(rest)
+            rest = key_of(rest)
             if rest in columns:
                 raise CompositionError(
                     f"{rest} is the rest and has a column", allowed="one of both"
@@ -199,17 +201,24 @@ def _split(header: Any) -> tuple[str, str | None]:
 def _component(name: str, unit: str | None) -> str | None:
     """Record key of a header; None for a column that is no component."""
     try:
-        return resolve(name)
-    except UnknownName:
+        return key_of(name)
+    except (UnknownName, BadInput):  # the latter: a number that only looks like a CAS number
         close = nearest(name, records.index())
         fraction_like = unit is not None and unit.casefold() in _PERCENT
-        if fraction_like or close:
+        # Among thousands of names any word has one that looks a little like it.
+        if fraction_like or any(_alike(name, other) >= _MISSPELT for other in close):
             raise UnknownName(
                 f"The column {name!r} is no component that is known",
                 choices=close,
                 hint="Rename the column if it is meant as something else",
             ) from None
         return None
+
+
+def _alike(first: str, second: str) -> float:
+    from difflib import SequenceMatcher
+
+    return SequenceMatcher(None, first.casefold(), second.casefold()).ratio()
 
 
 def _numbers(column: Any, header: Any) -> FloatArray:

@@ -14,7 +14,6 @@ from dropkit.errors import (
     MissingProperty,
 )
 from dropkit.properties import display
-from dropkit.properties.catalogue import resolve
 from dropkit.properties.composition import (
     check_basis,
     read_composition,
@@ -22,6 +21,7 @@ from dropkit.properties.composition import (
 from dropkit.properties.curves import FloatArray
 from dropkit.properties.frame_reading import Table, tell
 from dropkit.properties.mixtures import Mixture
+from dropkit.properties.other_chemicals import key_of
 from dropkit.properties.property_words import GRADED, KELVIN_HINT, property_names
 from dropkit.provenance import GRADES
 from dropkit.validity import Outside, check_outside
@@ -202,7 +202,7 @@ def grid(
     axes: dict[str, list[float]] = {}
     rest = None
     for name, value in components.items():
-        key = resolve(name)
+        key = key_of(name)
         if key in axes or key == rest:
             raise CompositionError(f"{key} appears twice, under two of its names")
         if isinstance(value, str) and value.strip().casefold() == "rest":

@@ -21,6 +21,7 @@ from dropkit.properties import display
 from dropkit.properties.cautions import mixture_cautions, mixture_phases
 from dropkit.properties.composition import (
     Composition,
+    awoken,
     check_basis,
     from_mass,
     read_composition,
@@ -411,7 +412,7 @@ class Mixture(Fluid):
             records=tuple(record_use(block) for block in used),
             assumptions=tuple(dict.fromkeys((*self.assumptions, *taken_for_granted(rule)))),
             cautions=tuple(dict.fromkeys(cautions)),
-            versions=versions(),
+            versions=versions(used),
         )
 
     def _spread(
@@ -443,4 +444,4 @@ class Mixture(Fluid):
 
 
 def _rebuild(composition: Composition, estimates: Literal["warn", "allow", "refuse"]) -> Mixture:
-    return Mixture(composition, estimates=estimates, quiet=True)
+    return Mixture(awoken(composition), estimates=estimates, quiet=True)

@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-import csv
 from collections.abc import Iterable, Iterator, Mapping
 from dataclasses import dataclass
 from functools import cache
@@ -12,6 +11,7 @@ import numpy as np
 from dropkit import records
 from dropkit.errors import RecordError
 from dropkit.properties.curves import FloatArray
+from dropkit.published_rows import published_file
 from dropkit.records import PropertyRecord
 
 __all__ = ["Points", "exclusion", "pair_points", "pure_points"]
@@ -45,8 +45,7 @@ def _rows(name: str) -> tuple[dict[str, str], ...]:
     path = records.data_dir() / "published" / f"{name}.csv"
     if not path.is_file():
         raise RecordError(f"published/{name}.csv is missing", hint="Correct `points` in the record")
-    with path.open(encoding="utf-8", newline="") as lines:
-        return tuple(csv.DictReader(line for line in lines if not line.startswith("#")))
+    return tuple(published_file(path, name))
 
 
 @cache
@@ -54,9 +53,8 @@ def _exclusions() -> dict[str, list[dict[str, str]]]:
     path = records.data_dir() / "published" / "excluded.csv"
     listed: dict[str, list[dict[str, str]]] = {}
     if path.is_file():
-        with path.open(encoding="utf-8", newline="") as lines:
-            for row in csv.DictReader(line for line in lines if not line.startswith("#")):
-                listed.setdefault(row["file"], []).append(row)
+        for row in published_file(path):
+            listed.setdefault(row["file"], []).append(row)
     return listed
 
 

@@ -1,4 +1,4 @@
-"""Pure liquids from dropkit's own records, and `liquid`, which finds them by name."""
+"""Pure liquids from dropkit's own records or the engines, and `liquid`, which finds them."""
 
 from __future__ import annotations
 
@@ -8,11 +8,18 @@ from typing import Any
 import numpy as np
 
 from dropkit import records
-from dropkit.errors import NotALiquid
-from dropkit.properties.catalogue import resolve
+from dropkit.errors import BadInput, DropkitWarning, MissingProperty, NotALiquid, warn_user
 from dropkit.properties.curves import Curve, FloatArray
 from dropkit.properties.interface import Fluid
-from dropkit.properties.property_words import PROPERTIES
+from dropkit.properties.other_chemicals import (
+    FROM_ENGINES,
+    awake,
+    from_engines,
+    key_of,
+    missing_from_engines,
+    with_engines,
+)
+from dropkit.properties.property_words import PROPERTIES, QUOTIENT
 from dropkit.properties.trails import record_use, relative_uncertainty, versions
 from dropkit.provenance import Trail, worst_grade
 from dropkit.validity import Range
@@ -20,13 +27,20 @@ from dropkit.validity import Range
 __all__ = ["Liquid", "liquid"]
 
 
-def liquid(name: str) -> Liquid:
+def liquid(name: str, *, engines: bool = False) -> Liquid:
     """A pure liquid by name, synonym, trade short form or CAS number.
+
+    Names mean dropkit's own records. A CAS number that none of them holds is asked of CoolProp and
+    of the handbook tables of thermo; the first such question of a process takes seconds and says
+    so in the log ``dropkit``.
 
     Parameters
     ----------
     name : str
-        Such as ``"water"``, ``"IPA"`` or ``"56-81-5"``.
+        Such as ``"water"``, ``"IPA"`` or ``"56-81-5"``; any chemical by CAS number.
+    engines : bool
+        True asks the engines also for the properties that the record lacks. What the record holds
+        is neither replaced nor extended.
 
     Returns
     -------
@@ -36,23 +50,36 @@ def liquid(name: str) -> Liquid:
     Raises
     ------
     UnknownName
-        With the nearest names.
+        With the nearest names; for a CAS number, what the engines have of it.
     AmbiguousName
         For names such as ``"xylene"`` that stand for several liquids.
     NotALiquid
         For a solid that dropkit knows as a solute only.
+    BadInput
+        For what is no text, or a CAS number whose last digit does not check.
+    EngineError
+        If an engine is missing or unreadable.
 
     Examples
     --------
     >>> import dropkit as dk
     >>> round(dk.liquid("water").density(293.15), 1)
     998.2
+
+    Bromobenzene has no record; the engines have it:
+
+    >>> bromobenzene = dk.liquid("108-86-1")
+    >>> round(bromobenzene.density(298.15)), bromobenzene.grade("density")
+    (1488, 'single')
     """
-    return _load(resolve(name))
+    if not isinstance(engines, bool):
+        raise BadInput(f"engines={engines!r}", allowed="True or False")
+    return _load(key_of(name), engines)
 
 
-def _load(key: str) -> Liquid:
-    return Liquid(records.liquid_record(key))
+def _load(key: str, engines: bool = False) -> Liquid:
+    record = records.liquid_record(awake(key))
+    return Liquid(with_engines(record) if engines else record, engines=engines)
 
 
 class Liquid(Fluid):
@@ -64,9 +91,11 @@ class Liquid(Fluid):
     ----------
     record : LiquidRecord
         The record, as `dropkit.records.liquid_record` gives it.
+    engines : bool
+        Whether the engines were asked for what the record lacks.
     """
 
-    def __init__(self, record: records.LiquidRecord) -> None:
+    def __init__(self, record: records.LiquidRecord, *, engines: bool = False) -> None:
         super().__init__()
         if record.kind != "liquid":
             raise NotALiquid(
@@ -77,10 +106,11 @@ class Liquid(Fluid):
         self.record = record
         self.key = record.key
         self.name = record.name
+        self._engines = engines or from_engines(record)
         self._curves: dict[str, Curve] = {}
 
     def __reduce__(self) -> tuple[Any, ...]:
-        return (_load, (self.key,))
+        return (_load, (self.key, self._engines))
 
     def __eq__(self, other: object) -> bool:
         return isinstance(other, Liquid) and other.record == self.record
@@ -120,6 +150,18 @@ class Liquid(Fluid):
         return self.record.critical_temperature
 
     @property
+    def heat_of_fusion(self) -> float | None:
+        """Heat of fusion at the melting point [J/kg], where the record has it."""
+        fact = self.record.facts.get("heat_of_fusion")
+        return float(fact["value"]) if fact else None
+
+    @property
+    def solid_density(self) -> float | None:
+        """Density of the solid [kg/m3], where the record has it."""
+        fact = self.record.facts.get("solid_density")
+        return float(fact["value"]) if fact else None
+
+    @property
     def flash_point(self) -> dict[str, Any] | None:
         """Flash point: value [K], method, source and place; None where the record has none."""
         fact = self.record.facts.get("flash_point")
@@ -145,9 +187,37 @@ class Liquid(Fluid):
         return tuple(
             prop
             for prop in PROPERTIES
-            if prop in held
-            or (prop == "kinematic_viscosity" and "density" in held and "viscosity" in held)
+            if prop in held or (prop == "kinematic_viscosity" and self._has_quotient())
         )
+
+    def _has_quotient(self) -> bool:
+        """Whether density and viscosity are there, and hold at common temperatures."""
+        held = self.record.properties
+        if "density" not in held or "viscosity" not in held:
+            return False
+        density, viscosity = self._record_range("density"), self._record_range("viscosity")
+        return max(density.low, viscosity.low) < min(density.high, viscosity.high)
+
+    def _missing(self, prop: str) -> MissingProperty:
+        if self._engines:
+            return missing_from_engines(self.record, prop)
+        problem = super()._missing(prop)
+        if prop not in FROM_ENGINES:
+            return problem
+        hint = f"{problem.hint}; or ask the engines: liquid({self.name!r}, engines=True)"
+        return MissingProperty(problem.what, allowed=problem.allowed, hint=hint)
+
+    def _not_finite(self, prop: str, count: int) -> float:
+        parts = QUOTIENT if self._is_quotient(prop) else (prop,)
+        if not any(self.curve(part).by_engine for part in parts):
+            return super()._not_finite(prop, count)
+        many = "1 value" if count == 1 else f"{count} values"
+        warn_user(
+            f"{prop} of {self.name}: engines are not extrapolated; {many} outside the stated "
+            "range became NaN",
+            DropkitWarning,
+        )
+        return float("nan")
 
     def curve(self, prop: str, *, inside_mixtures: bool = False) -> Curve:
         """The compiled records of a property; for dropkit's own layers.
@@ -212,19 +282,28 @@ class Liquid(Fluid):
             else max(relative_uncertainty(block, value) for block in blocks),
             records=tuple(record_use(block) for block in blocks),
             cautions=tuple(dict.fromkeys(cautions)),
-            versions=versions(),
+            versions=versions(blocks),
         )
 
     # ------------------------------------------------ display
+    @property
+    def _title(self) -> str:
+        parts = [f"Liquid {self.name}", self.cas and f"CAS {self.cas}", self.formula]
+        if from_engines(self.record):
+            parts.append("from CoolProp and handbook tables")
+        elif self._engines:
+            parts.append("what the record lacks from CoolProp and handbook tables")
+        return ", ".join(filter(None, parts))
+
     def __repr__(self) -> str:
         from dropkit.properties import display
 
-        return display.fluid_text(self, f"Liquid {self.name}, CAS {self.cas}, {self.formula}")
+        return display.fluid_text(self, self._title)
 
     def _repr_html_(self) -> str:
         from dropkit.properties import display
 
-        return display.fluid_html(self, f"Liquid {self.name}, CAS {self.cas}, {self.formula}")
+        return display.fluid_html(self, self._title)
 
 
 def _serving(curve: Curve, temperature: float | FloatArray | None) -> list[int]:

@@ -340,9 +340,9 @@ def _fill_up(others: Mapping[str, Any], share: Any, rest: str, before: float) ->
 
 
 def _component(fluid: Mixture, vary: Any) -> str:
-    from dropkit.properties.catalogue import resolve
+    from dropkit.properties.other_chemicals import key_of
 
-    key = resolve(vary)
+    key = key_of(vary)
     if key not in fluid.components:
         raise UnknownName(
             f"{vary!r} is no component of {fluid.name}",

@@ -13,9 +13,14 @@ from dropkit.version import VERSION
 __all__ = ["grade_with", "quotient_trail", "record_use", "relative_uncertainty", "versions"]
 
 
-def versions() -> dict[str, str]:
-    """Versions of dropkit and its data, for trails."""
-    return {"dropkit": VERSION, "data": records.data_version()}
+def versions(blocks: Iterable[records.PropertyRecord] = ()) -> dict[str, str]:
+    """Versions of dropkit, its data, and any engine behind some records, for trails."""
+    engines = {
+        block.parameters["engine"]: block.parameters["version"]
+        for block in blocks
+        if "engine" in block.parameters
+    }
+    return {"dropkit": VERSION, "data": records.data_version(), **engines}
 
 
 def record_use(block: records.PropertyRecord) -> RecordUse:

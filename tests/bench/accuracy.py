@@ -9,7 +9,6 @@ builder wrote into the records: a source, or every fifth point, refitted without
 
 from __future__ import annotations
 
-import csv
 import sys
 import warnings
 from collections.abc import Iterator
@@ -24,6 +23,7 @@ from dropkit import records
 from dropkit.properties.composition import to_mass
 from dropkit.properties.points import exclusion
 from dropkit.properties.property_words import GRADED
+from dropkit.published_rows import published_file
 
 PAGE_HEAD = """# How close the records come to published points
 
@@ -47,10 +47,9 @@ def rows(folder: str) -> Iterator[tuple[str, dict[str, str]]]:
     """Every published row of a folder that isn't excluded, with the name of its file."""
     for path in sorted((records.data_dir() / "published" / folder).glob("*.csv")):
         name = f"{folder}/{path.stem}"
-        with path.open(encoding="utf-8", newline="") as lines:
-            for row in csv.DictReader(line for line in lines if not line.startswith("#")):
-                if not exclusion(name, row):
-                    yield name, row
+        for row in published_file(path, name):
+            if not exclusion(name, row):
+                yield name, row
 
 
 # Files of values that we evaluated from handbook equations: they tell how handbooks differ,

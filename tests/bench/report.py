@@ -14,15 +14,18 @@ import sys
 import tempfile
 from collections.abc import Iterator
 from importlib import metadata
+from pathlib import Path
 from typing import NamedTuple
 
 import numpy as np
 import pint
 from bench_cases import HIGH, LOW, SIX, STRINGS, TEMPERATURES, fractions, temperatures
+from bench_liquids import ASKED, FIRST_CHOICES, made_up_folder
 from bench_rivals import ENGINES, bare, bare_viscosity_of_pair, tabulated_water_viscosity
 from bench_timing import PINT, duel, per_call, start_costs
 
 import dropkit as dk
+from dropkit import records
 
 MILLION = 1_000_000
 PURE = [
@@ -115,6 +118,29 @@ def arrays() -> Iterator[Row]:
         yield Row(f"1e6 points of glycerol-water, viscosity{note}", d.ratio, 2, "x", times)
 
 
+def finding() -> Iterator[Row]:
+    """Listing and filtering 150 liquids, copies of the real ones, first in new processes."""
+    with tempfile.TemporaryDirectory() as folder:
+        root = str(made_up_folder(Path(folder, "data"), 150))
+        script = FIRST_CHOICES.format(root=root, asked=ASKED)
+        named = ["import pandas, for scale", "list 150 liquids, first", "filter 150 liquids, first"]
+        for what, (clock, processor) in zip(named, start_costs(script), strict=True):
+            reach = 50 if "150" in what else None
+            yield Row(what, clock * 1e3, reach, "ms", f"{processor * 1e3:.3g} ms of processor")
+        own, records._STORE = records._STORE, records.Store(root)
+        calls = {
+            "list": dk.liquids,
+            "search": lambda: dk.liquids("copy 12"),
+            "filter": lambda: dk.choose(**ASKED),
+        }
+        try:
+            for what, call in calls.items():
+                cost = duel(call, lambda: None).ours
+                yield Row(f"{what} 150 liquids, again", cost * 1e3, 50, "ms", "")
+        finally:
+            records._STORE = own
+
+
 def engines(tables: bool) -> Iterator[Row]:
     """Per element, against the array paths of the engines."""
     T, large = temperatures(10_000), temperatures(MILLION)
@@ -156,7 +182,7 @@ def main() -> None:
     )
     print(f"load before: {os.getloadavg()[0]:.1f}\n" if hasattr(os, "getloadavg") else "")
     print(f"{'what':<58}{'measured':>14}{'promised':>9}           beside")
-    for part in (starts(), scalars(), arrays(), engines("--tables" in sys.argv)):
+    for part in (starts(), finding(), scalars(), arrays(), engines("--tables" in sys.argv)):
         for row in part:
             print(row.text(), flush=True)
 

@@ -6,10 +6,11 @@ library's own mixing is not used, so that neither can hide a fault of the other.
 
 from __future__ import annotations
 
-import csv
 import itertools
 import math
+import sys
 from collections.abc import Callable, Iterator
+from functools import cache
 from pathlib import Path
 from typing import Any
 
@@ -17,10 +18,20 @@ import numpy as np
 
 from dropkit.errors import RecordError
 from dropkit.properties.equations import FORMS, evaluate
+from dropkit.published_rows import published_file
 from dropkit.record_rules import ARCHIVE, independent, problems, publication, second_sources
 from dropkit.record_store import Store
-from dropkit.record_types import PROPERTIES, LiquidRecord, PairRecord, PropertyRecord
+from dropkit.record_types import (
+    INTERFACIAL,
+    PROPERTIES,
+    LiquidRecord,
+    PairRecord,
+    PropertyRecord,
+)
 from dropkit.unit_table import KINDS, NOMENCLATURE
+
+sys.path.append(str(Path(__file__).resolve().parents[2] / "data" / "build"))
+from record_builder.independent import independent_points  # noqa: E402  no installed package
 
 GAS_CONSTANT = 8.314462618  # J/(mol K)
 ATMOSPHERE = 101325.0  # Pa
@@ -30,6 +41,12 @@ MIXTURE_COLUMNS = [
     *("component_1", "component_2", "basis", "fraction_1"),
     *("T_K", "property", "value", "doi"),
 ]
+INTERFACE_COLUMNS = ["liquid_1", "liquid_2", "T_K", "value", "doi"]
+PARTS = {
+    "liquids": ("liquid",),
+    "mixtures": ("component_1", "component_2"),
+    "interfaces": ("liquid_1", "liquid_2"),
+}
 EXCLUDED_COLUMNS = [
     *("file", "component_1", "component_2", "property", "T_K"),
     *("fraction_1", "value", "reason", "contradicting_source"),
@@ -44,6 +61,7 @@ RULES = {
 }
 
 Record = LiquidRecord | PairRecord
+FOLDERS = ("liquids", "mixtures", "interfaces")
 
 
 class Folder:
@@ -52,20 +70,19 @@ class Folder:
     def __init__(self, root: Path) -> None:
         self.root = Path(root)
         self.store = Store(str(root))
+        self._rows: dict[str, list[dict[str, Any]]] = {}
 
     def names(self) -> list[str]:
-        """``liquids/...`` and ``mixtures/...``."""
+        """``liquids/...``, ``mixtures/...`` and ``interfaces/...``."""
         return [
-            f"{folder}/{stem}"
-            for folder in ("liquids", "mixtures")
-            for stem in sorted(self.store.stems(folder))
+            f"{folder}/{stem}" for folder in FOLDERS for stem in sorted(self.store.stems(folder))
         ]
 
     def published(self) -> list[str]:
         """Published files, as `points` names them."""
         return [
             f"{folder}/{path.stem}"
-            for folder in ("liquids", "mixtures")
+            for folder in FOLDERS
             for path in sorted((self.root / "published" / folder).glob("*.csv"))
         ]
 
@@ -74,7 +91,8 @@ class Folder:
         folder, stem = name.split("/")
         if folder == "liquids":
             return self.store.liquid(stem)
-        pair = self.store.pair(*stem.split("__"))
+        find = self.store.pair if folder == "mixtures" else self.store.interface
+        pair = find(*stem.split("__"))
         assert pair is not None
         return pair
 
@@ -85,8 +103,9 @@ class Folder:
 
     def rows(self, name: str) -> list[dict[str, Any]]:
         """The rows of a published file."""
-        text = (self.root / "published" / f"{name}.csv").read_text(encoding="utf-8")
-        return list(csv.DictReader(text.splitlines()[len(self.comments(name)) :]))
+        if name not in self._rows:
+            self._rows[name] = published_file(self.root / "published" / f"{name}.csv", name)
+        return self._rows[name]
 
 
 # Values ------------------------------------------------------------------------------------
@@ -160,10 +179,36 @@ def _redlich_kister(
 def _salt(
     block: PropertyRecord, one: LiquidRecord, two: LiquidRecord, w1: np.ndarray, T: np.ndarray
 ) -> np.ndarray:
-    """Laliberte 2009, Dutcher 2010; the solute may be either component."""
+    """Laliberte 2009, Dutcher 2010, a polynomial; the solute may be either component."""
     p, t = block.parameters, T - 273.15
     solvent, salt, ws = (one, two, 1.0 - w1) if two.kind == "solute" else (two, one, w1)
     y0 = component(solvent, block.property, T)
+    if block.form == "solute_polynomial":
+        per_mass, of_water = 1.0 / salt.molar_mass, 1.0 / solvent.molar_mass
+        x = ws * per_mass / (ws * per_mass + (1.0 - ws) * of_water) if p["basis"] == "mole" else ws
+        th = (T - p.get("centre", 298.15)) / p.get("scale", 100.0)
+        change = sum(
+            x**i * sum(c * th**j for j, c in enumerate(row))
+            for i, row in enumerate(p["coefficients"], 1)
+        )
+        found = {"log": y0 * np.exp(change), "ratio": y0 + y0 * change, "linear": y0 + change}
+        return np.asarray(found[p["transform"]])
+    # Some apparent values are infinite without salt, where they are weighted with zero.
+    empty, ws = ws == 0.0, np.where(ws == 0.0, 1e-12, ws)
+    made = _laliberte_or_dutcher(block, salt, solvent, ws, T, t, y0)
+    return np.where(empty, y0, made)
+
+
+def _laliberte_or_dutcher(
+    block: PropertyRecord,
+    salt: LiquidRecord,
+    solvent: LiquidRecord,
+    ws: np.ndarray,
+    T: np.ndarray,
+    t: np.ndarray,
+    y0: np.ndarray,
+) -> np.ndarray:
+    p = block.parameters
     if block.form == "laliberte_density":
         apparent = (
             (p["c0"] * ws + p["c1"])
@@ -187,10 +232,15 @@ def _salt(
 
 
 def value(folder: Folder, record: Record, block: PropertyRecord, T: Any, w: Any) -> np.ndarray:
-    """A block of a liquid or pair; `w` is passed over for a liquid."""
-    if isinstance(record, LiquidRecord):
+    """A block of a liquid, pair or interface; `w` is passed over where there is no composition."""
+    if isinstance(record, LiquidRecord) or touching(record):
         return pure(block, T)
     return mixed(folder, record, block, w, T)
+
+
+def touching(record: Record) -> bool:
+    """Whether it is the record of two liquids in contact, a function of temperature alone."""
+    return INTERFACIAL in record.properties
 
 
 def blocks(record: Record) -> Iterator[PropertyRecord]:
@@ -205,8 +255,8 @@ def relative_uncertainty(block: PropertyRecord, at: float) -> float:
 
 
 def fractions(record: Record, block: PropertyRecord, count: int) -> list[float]:
-    """Mass fractions over the range of a pair's block; one entry for a pure liquid."""
-    if isinstance(record, LiquidRecord):
+    """Mass fractions over the range of a pair's block; one entry where there is none."""
+    if isinstance(record, LiquidRecord) or touching(record):
         return [math.nan]
     low, high = block.parameters["fraction_range"]
     return [float(w) for w in np.linspace(low, high, count)]
@@ -247,6 +297,8 @@ def rows_of(folder: Folder, file: str, record: Record, name: str) -> list[dict[s
     """Rows of a published file that belong to a record and property."""
     if isinstance(record, LiquidRecord):
         wanted = {"liquid": record.key, "property": name}
+    elif touching(record):
+        wanted = dict(zip(INTERFACE_COLUMNS, record.components, strict=False))
     else:
         one, two = record.components
         wanted = {"component_1": one, "component_2": two, "property": name}
@@ -270,7 +322,7 @@ def equations(folder: Folder, name: str, record: Record) -> list[str]:
         try:
             low, high = widest(block)
             value(folder, record, block, [low, high], fractions(record, block, 2))
-            if isinstance(record, LiquidRecord):
+            if isinstance(record, LiquidRecord) or touching(record):
                 FORMS[block.form].scalar(block.parameters, label=block.label)
             elif block.form == "redlich_kister":
                 rule = (block.parameters["transform"], block.parameters["basis"])
@@ -312,21 +364,29 @@ def tolerances(folder: Folder, name: str, record: Record) -> list[str]:
     return found
 
 
+@cache
+def _independent(root: Path, name: str) -> dict[tuple[str, int], list[tuple[float, float, float]]]:
+    """Temperatures, fractions and values of the second sources' points, by property and block."""
+    return {
+        (prop, number): [(p.temperature, p.fraction, p.value) for p in found]
+        for prop, number, found in independent_points(name, root)
+    }
+
+
 def held(folder: Folder, record: Record, block: PropertyRecord) -> tuple[float, int]:
     """Share of a block's independent points within two standard uncertainties, and their number.
 
-    The points are those that the builder compared it with: role "second" in its residuals.
+    The points are those that the builder compared it with, found anew from the spec.
     """
-    stem = block.label.partition(":")[0].partition("/")[2]
-    place = folder.root / "build" / "residuals" / f"{stem}.csv"
-    number = block.label.rpartition(" ")[2]
+    kind, _, stem = block.label.partition(":")[0].partition("/")
+    name = f"{kind}/{stem}" if kind == "interfaces" else stem
+    number = int(block.label.rpartition(" ")[2])
     inside = []
-    with place.open(encoding="utf-8", newline="") as lines:
-        for row in csv.DictReader(lines):
-            if (row["property"], row["block"], row["role"]) == (block.property, number, "second"):
-                off = abs(float(row["deviation_percent"])) / 100.0
-                u = relative_uncertainty(block, float(row["value"]))
-                inside.append(off <= 2.001 * u)
+    for T, fraction, published in _independent(folder.root, name).get((block.property, number), []):
+        w = None if math.isnan(fraction) else fraction
+        got = float(value(folder, record, block, T, w)[0])
+        u = relative_uncertainty(block, published)
+        inside.append(abs(got / published - 1.0) <= 2.001 * u)
     return (float(np.mean(inside)) if inside else 1.0), len(inside)
 
 
@@ -356,7 +416,7 @@ def sane(folder: Folder, name: str, record: Record) -> list[str]:
 
 def ends(folder: Folder, name: str, record: Record) -> list[str]:
     """Scalar and array body give the same at both ends of every range."""
-    if isinstance(record, PairRecord):
+    if isinstance(record, PairRecord) and not touching(record):
         return []
     found = []
     for block in blocks(record):
@@ -368,6 +428,12 @@ def ends(folder: Folder, name: str, record: Record) -> list[str]:
     return found
 
 
+def _holds_fraction(block: PropertyRecord, w: float) -> bool:
+    """Whether a block of a pair serves a mass fraction."""
+    low, high = block.parameters.get("fraction_range", (0.0, 1.0))
+    return bool(low <= w <= high)
+
+
 def joins(folder: Folder, name: str, record: Record) -> list[str]:
     """Blocks of one property step by less than their combined uncertainty (95 %)."""
     found = []
@@ -377,6 +443,8 @@ def joins(folder: Folder, name: str, record: Record) -> list[str]:
                 if not second.range.holds(T):
                     continue
                 for w in fractions(record, first, 5):
+                    if not math.isnan(w) and not _holds_fraction(second, w):
+                        continue
                     a = value(folder, record, first, T, w)[0]
                     b = value(folder, record, second, T, w)[0]
                     allowed = 2.0 * math.hypot(
@@ -427,6 +495,8 @@ def temperatures(folder: Folder, name: str, record: Record) -> list[str]:
             critical = record.critical_temperature
             if critical is not None and widest(block)[1] > critical:
                 found.append(f"{block.label}: range passes the critical point, {critical:g} K")
+            continue
+        if touching(record):
             continue
         low, high = block.range.low, block.range.high
         for key in record.components:
@@ -526,7 +596,6 @@ RECORD_CHECKS: list[Callable[[Folder, str, Record], list[str]]] = [
 def published(folder: Folder, name: str) -> list[str]:
     """Header, columns, known components and properties, values in SI of a plausible size."""
     kind, stem = name.split("/")
-    pair = kind == "mixtures"
     found = []
     heads = [line.split(":")[0] for line in folder.comments(name)]
     for wanted in ("# source", "# seen", "# uncertainty"):
@@ -537,35 +606,40 @@ def published(folder: Folder, name: str) -> list[str]:
     ):
         found.append(f"published/{name}: there is no source {publication(stem)}")
     rows = folder.rows(name)
-    columns = MIXTURE_COLUMNS if pair else LIQUID_COLUMNS
+    columns = dict(zip(FOLDERS, (LIQUID_COLUMNS, MIXTURE_COLUMNS, INTERFACE_COLUMNS), strict=True))[
+        kind
+    ]
     if not rows or list(rows[0]) != columns:
         return [*found, f"published/{name}: needs rows with the columns {','.join(columns)}"]
     for number, row in enumerate(rows, 1):
         found.extend(
-            f"published/{name}, row {number}: {problem}" for problem in _row(folder, row, pair=pair)
+            f"published/{name}, row {number}: {problem}" for problem in _row(folder, row, kind)
         )
     return found
 
 
-def _row(folder: Folder, row: dict[str, Any], *, pair: bool) -> Iterator[str]:
+def _row(folder: Folder, row: dict[str, Any], kind: str) -> Iterator[str]:
     if None in row or None in row.values():
         yield "has another number of fields than the header"
         return
-    parts = [row["component_1"], row["component_2"]] if pair else [row["liquid"]]
+    parts = [row[name] for name in PARTS[kind]]
+    # The columns of an interface name its property; its liquids may still have to be built.
+    row = row if "property" in row else {**row, "property": INTERFACIAL}
+    planned = folder.root / "build" / "specs" / "interfaces" / f"{'__'.join(parts)}.toml"
     for key in parts:
-        if key not in folder.store.stems("liquids"):
+        if key not in folder.store.stems("liquids") and not planned.is_file():
             yield f"there is no liquid '{key}'"
     if parts != sorted(parts):
         yield "components are not in alphabetical order"
-    if row["property"] not in PROPERTIES:
+    if row["property"] not in (*PROPERTIES, INTERFACIAL):
         yield f"property '{row['property']}' is not known"
         return
     if row["doi"].casefold().startswith(("doi", "http")):
         yield f"'{row['doi']}' is no bare DOI"
-    kind = KINDS[NOMENCLATURE.get(row["property"], row["property"])]
-    low, high = kind.plausible or (0.0, math.inf)
+    unit = KINDS[NOMENCLATURE.get(row["property"], row["property"])]
+    low, high = unit.plausible or (0.0, math.inf)
     limits = {"T_K": (150.0, 2500.0), "value": (low, high)}
-    if pair:
+    if kind == "mixtures":
         limits["fraction_1"] = (0.0, 1.0)
         if row["basis"] not in ("mass", "mole"):
             yield f"basis '{row['basis']}' is not mass or mole"
@@ -583,7 +657,7 @@ def excluded(folder: Folder) -> list[str]:
     path = folder.root / "published" / "excluded.csv"
     if not path.is_file():
         return []
-    rows = list(csv.DictReader(path.read_text(encoding="utf-8").splitlines()))
+    rows = published_file(path)
     if rows and list(rows[0]) != EXCLUDED_COLUMNS:
         return [f"published/excluded.csv: needs the columns {','.join(EXCLUDED_COLUMNS)}"]
     found = []
@@ -610,6 +684,10 @@ def _same(row: dict[str, Any], candidate: dict[str, Any]) -> bool:
             return False
         keys = {"property": "property", "component_1": "liquid"}
         numbers = numbers[:2]
+    if "liquid_1" in candidate:
+        if row["property"] != INTERFACIAL or row["fraction_1"]:
+            return False
+        keys, numbers = {"component_1": "liquid_1", "component_2": "liquid_2"}, numbers[:2]
     return all(row[mine] == candidate[theirs] for mine, theirs in keys.items()) and all(
         math.isclose(float(row[column]), float(candidate[column]), rel_tol=1e-9)
         for column in numbers

@@ -39,6 +39,7 @@ BROKEN: list[tuple[Callable[..., list[str]], str, str, str, str]] = [
     (checks.earned, ALPHA, '["Able1901", "Baker1902"]', '["Cook1903"]', "two independent"),
     (checks.earned, ALPHA, "uncertainty = 0.05", "uncertainty = 0.03", "recalled"),
     (checks.earned, ALPHA, 'grade = "recalled"', 'grade = "single"', "from memory"),
+    (checks.earned, ALPHA, "value = 380.0", "value = 150.0", "own vapour pressure only"),
     (
         checks.earned,
         ALPHA,

@@ -10,12 +10,12 @@ from typing import Any
 import made_up_records as made_up
 import pandas as pd
 import pytest
-from hypothesis import given
+from hypothesis import assume, given
 from hypothesis import strategies as st
 
 from dropkit import records
 from dropkit.errors import AmbiguousName, BadInput, DropkitError, UnknownName
-from dropkit.properties.catalogue import liquids, resolve
+from dropkit.properties.catalogue import family_names, liquids, resolve
 from dropkit.record_types import PROPERTIES
 
 
@@ -122,6 +122,81 @@ def test_the_table_lists_every_record(store: records.Store) -> None:
     assert store._liquids == {}
 
 
+@pytest.mark.parametrize(
+    ("search", "keys"),
+    [
+        ("alpha", ["alpha"]),
+        ("Alpha_Liq", ["alpha"]),
+        ("liquid", ["alpha"]),
+        ("first-liquid", ["alpha"]),
+        ("bt", ["beta"]),
+        ("a", ["alpha", "beta", "gamma"]),
+        ("11-23-4", ["alpha"]),
+        ("A2", ["alpha"]),
+        ("(A)2", ["alpha"]),
+        ("AA", ["alpha"]),
+        ("invented", ["alpha", "beta"]),
+        ("Salts", ["gamma"]),
+        ("greek", ["alpha", "beta"]),
+    ],
+)
+def test_a_search_finds_names_numbers_formulas_and_families(
+    store: records.Store, search: str, keys: list[str]
+) -> None:
+    found = liquids(search)
+    assert list(found.index) == keys
+    assert found.equals(liquids().loc[keys])
+
+
+@pytest.mark.parametrize("search", ["11-23", "1123", "23"])
+def test_a_part_of_a_cas_number_finds_nothing(store: records.Store, search: str) -> None:
+    with pytest.raises(UnknownName, match=f"no liquid matches '{search}'"):
+        liquids(search)
+
+
+def test_a_search_without_a_hit_says_families_and_the_nearest(store: records.Store) -> None:
+    with pytest.raises(UnknownName, match="or a family: invented, salt") as caught:
+        liquids("alfa liquid")
+    assert caught.value.choices[0] == "Alpha Liquid"
+    with pytest.raises(UnknownName) as caught:
+        liquids("inventet")
+    assert "invented" in caught.value.choices
+    with pytest.raises(UnknownName, match=r"dropkit.liquid\('108-86-1'\) asks the engines"):
+        liquids("108-86-1")
+
+
+def test_an_ambiguous_search_without_records_says_so(store: records.Store) -> None:
+    made_up.edit(Path(store.root), "ambiguous.toml", '["alpha", "beta"]', '["psi", "omega"]')
+    with pytest.raises(AmbiguousName, match="None of them has a record yet"):
+        liquids("greek")
+
+
+@pytest.mark.parametrize("search", ["", "  ", "-", 3, True, ["water"], b"water"])
+def test_what_cannot_be_searched_is_refused(store: records.Store, search: Any) -> None:
+    with pytest.raises(BadInput, match="nothing to look for"):
+        liquids(search)
+
+
+@given(st.text())
+def test_any_search_gives_rows_or_an_error_of_ours(search: str) -> None:
+    try:
+        found = set(liquids(search).index)
+    except DropkitError:
+        found = set()
+    assert found <= set(records.summaries())
+
+
+@given(st.data())
+def test_every_part_of_a_name_finds_its_record(data: st.DataObject) -> None:
+    key = data.draw(st.sampled_from(sorted(records.summaries())))
+    entry = records.summaries()[key]
+    name = data.draw(st.sampled_from([key, entry["name"], *entry["synonyms"]]))
+    start = data.draw(st.integers(0, len(name) - 1))
+    part = name[start : data.draw(st.integers(start + 1, len(name)))]
+    assume(records.fold(part))
+    assert key in liquids(part).index
+
+
 def test_each_call_gives_a_table_of_its_own(store: records.Store) -> None:
     table = liquids()
     table.loc["alpha", "name"] = "changed"
@@ -187,7 +262,9 @@ def test_trade_short_forms_resolve(name: str, key: str) -> None:
 def test_names_that_stand_for_several_liquids_are_refused(name: str) -> None:
     with pytest.raises(AmbiguousName, match="several liquids") as caught:
         resolve(name)
-    assert len(caught.value.choices) >= 2
+    allowed = caught.value.allowed.split(", ")
+    assert len(allowed) >= 2
+    assert set(caught.value.choices) <= set(allowed)
 
 
 def test_every_name_in_the_index_resolves_to_its_record() -> None:
@@ -211,3 +288,32 @@ def test_cas_numbers_have_a_right_check_digit() -> None:
             assert weighted % 10 == last, entry["name"]
             checked += 1
     assert checked
+
+
+@pytest.mark.parametrize(
+    ("search", "keys"),
+    [
+        ("C3H8O", {"1-propanol", "2-propanol"}),
+        ("c3h8o", {"1-propanol", "2-propanol"}),
+        ("CH3CHOHCH3", {"1-propanol", "2-propanol"}),
+        ("(CH3)2CO", {"acetone"}),
+        ("64-17-5", {"ethanol"}),
+        ("glycol", {"ethylene_glycol", "propylene_glycol"}),
+        ("alcohol", {"methanol", "ethanol", "1-propanol", "2-propanol"}),
+        ("alcohols", {"methanol", "ethanol", "1-propanol", "2-propanol"}),
+        ("Alkane", {"n-heptane", "n-dodecane", "n-hexadecane"}),
+    ],
+)
+def test_searches_of_the_trade(search: str, keys: set[str]) -> None:
+    assert keys <= set(liquids(search).index)
+
+
+def test_a_cas_number_finds_one_record() -> None:
+    for key, entry in records.summaries().items():
+        if entry["cas"]:
+            assert list(liquids(entry["cas"]).index) == [key]
+
+
+def test_families_are_those_of_the_records() -> None:
+    assert {"alcohol", "water", "metal"} <= set(family_names())
+    assert family_names() == sorted({entry["family"] for entry in records.summaries().values()})

@@ -85,9 +85,14 @@ def test_scalars_arrays_series_and_units_agree(key):
         assert type(look(np.array(kelvin[3]))) is float
 
 
+@pytest.mark.filterwarnings("ignore::dropkit.errors.RecalledWarning")
 @pytest.mark.parametrize("key", KEYS)
 def test_nan_comes_out_as_nan(key):
     fluid = dk.liquid(key)
+    if "density" not in fluid.available():
+        with pytest.raises(MissingProperty, match="density"):
+            fluid.density(float("nan"))
+        return
     middle = 0.5 * (fluid.range("density").low + fluid.range("density").high)
     assert np.isnan(fluid.density(float("nan")))
     found = fluid.density(np.array([middle, np.nan]))
@@ -224,6 +229,7 @@ def test_cite_lists_every_source():
     assert len(text.splitlines()) == len(dk.liquid("water").sources)
 
 
+@pytest.mark.filterwarnings("ignore::dropkit.errors.RecalledWarning")
 @given(
     st.sampled_from(KEYS),
     st.one_of(
@@ -249,11 +255,17 @@ def test_anything_gives_a_number_or_an_error_of_ours(key, temperature, outside):
         assert np.array_equal(np.isnan(value), np.isnan(kelvin))
 
 
+@pytest.mark.filterwarnings("ignore::dropkit.errors.RecalledWarning")
 @given(st.sampled_from(KEYS), st.floats(0.0, 1.0), st.floats(0.0, 1.0))
 def test_viscosity_and_surface_tension_fall_with_temperature(key, a, b):
     fluid = dk.liquid(key)
     for prop in ("viscosity", "surface_tension"):
+        blocks = fluid.record.properties.get(prop, ())
+        if not blocks:
+            continue
         limits = fluid.range(prop)
         low, high = (limits.low + x * (limits.high - limits.low) for x in sorted((a, b)))
+        # Where one block gives way to the next, a step within their uncertainties is allowed.
+        step = 2.0 * sum(block.uncertainty for block in blocks) if len(blocks) > 1 else 1e-12
         look = getattr(fluid, prop)
-        assert look(high) <= look(low) * (1 + 1e-12)
+        assert look(high) <= look(low) * (1.0 + step)

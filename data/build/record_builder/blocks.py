@@ -9,8 +9,9 @@ from typing import Any
 import numpy as np
 
 from dropkit.properties.equations import FORMS
+from dropkit.record_types import INTERFACIAL, LEADING
 from record_builder import BuildError, Refused
-from record_builder.checking import chosen_checks, verify
+from record_builder.checking import chosen_checks, given_checks, verify
 from record_builder.fitting import excess
 from record_builder.forms import Parameters, parameter_names
 from record_builder.formulations import SAMPLE, sample
@@ -37,6 +38,7 @@ _KEYS = {
     *("source_uncertainty_reason", "single_reason", "grade", "limit_class", "cautions", "points"),
     *("viscosity_change_by_water", "viscosity_change_by_water_reason", "checks", "degree"),
     *("rows", "columns", "robust", "balance", "ridge", "exponent", "note"),
+    *("transform", "basis", "centre", "scale"),
 }
 # Kept in the record, so that a reader sees why.
 _REMARKS = ("mixture_range_reason", "source_uncertainty_reason", "single_reason", "note")
@@ -158,7 +160,7 @@ class _Block:
             order = sorted(points, key=lambda p: (p.temperature, p.fraction, p.value))
             count = min(5, len(order))
             groups = [order[start::count] for start in range(count)]
-            words = "every fifth point, five times" if count == 5 else "each point in turn"
+            words = "every fifth point" if count == 5 else "each point in turn"
         else:
             raise BuildError(f"{self.what}: left_out = {how!r}; allowed: source, every fifth")
         found: list[Deviation] = []
@@ -178,14 +180,12 @@ class _Block:
 
 
 def _obtained(spec: Mapping[str, Any], points: Sequence[Point]) -> str:
-    if "published" in spec:
-        return "as published"
     sampled = sum(p.file == SAMPLE for p in points)
     parts = []
     if sampled:
         parts.append(f"{sampled} values of {spec['formulation']}")
     if len(points) > sampled:
-        parts.append(f"{len(points) - sampled} published points")
+        parts.append(f"{len(points) - sampled} points")
     robust = ", robust" if spec.get("robust") else ""
     return f"fitted here to {' and '.join(parts)}{robust}"
 
@@ -356,24 +356,27 @@ def build_block(
     if spec.get("absolute"):
         record["uncertainty_absolute"] = spread.covering_si
     record |= {"grade": grade, "sources": sources, "place": spec["place"]}
-    record["obtained"] = _obtained(spec, points)
+    if "published" not in spec:  # else as published, which is what a record says by silence
+        record["obtained"] = _obtained(spec, points)
     if judged:
         record["second"] = _second(judged)
     if left:
         numbers = summary(relative(left))
-        record["left_out"] = {"how": how} | {
-            name: numbers[name] for name in ("points", "median", "p95", "worst")
-        }
-    record["checks"] = [dict(check) for check in spec.get("checks", [])] or chosen_checks(
-        inside or [d for d in fitted if d.role == "fit"], record
+        record["left_out"] = {"how": how} | {name: numbers[name] for name in ("median", "p95")}
+    files = [p.file for p in (*chosen, *second_points) if p.file != SAMPLE]
+    shown = list(spec.get("points", dict.fromkeys(files)))
+    record["checks"] = given_checks(spec.get("checks", []), record, what) or chosen_checks(
+        inside or [d for d in fitted if d.role == "fit"],
+        record,
+        shown,
+        3 if prop in LEADING or block.pair else 1,
     )
     verify(block.subject, prop, record)
     record["cautions"] = list(spec.get("cautions", []))
     if "extrapolated" in spec:
         record["range_reason"] = spec["extrapolated"]
     record |= {key: spec[key] for key in _REMARKS if key in spec}
-    files = [p.file for p in (*chosen, *second_points) if p.file != SAMPLE]
-    record["points"] = list(spec.get("points", dict.fromkeys(files)))
+    record["points"] = [name.removeprefix(f"{_folder(block)}/") for name in shown]
 
     report |= {
         "grade": grade,
@@ -391,6 +394,13 @@ def build_block(
     return Built(record, everything, report)
 
 
+def _folder(block: _Block) -> str:
+    """The folder of `data` and of `data/published` that a record and its points belong to."""
+    if block.pair:
+        return "mixtures"
+    return "interfaces" if block.prop == INTERFACIAL else "liquids"
+
+
 def _second(judged: Sequence[Deviation]) -> dict[str, Any]:
     keys: dict[str, int] = {}
     for deviation in judged:
@@ -399,14 +409,14 @@ def _second(judged: Sequence[Deviation]) -> dict[str, Any]:
     numbers = summary(relative(judged))
     found: dict[str, Any] = {"source": order[0]}
     if len(order) > 1:
-        found["sources"] = order
+        found["sources"] = order[1:]
     return {name: numbers[name] for name in ("points", "median", "worst")} | found
 
 
 def _rounded(value: Any) -> Any:
-    """Twelve figures: far beyond any data, and short enough to read."""
+    """Ten figures: far beyond any data, and short enough to read."""
     if isinstance(value, float):
-        return float(f"{value:.12g}")
+        return float(f"{value:.10g}")
     if isinstance(value, list):
         return [_rounded(entry) for entry in value]
     if isinstance(value, dict):

@@ -13,11 +13,12 @@ from collections.abc import Mapping, Sequence
 from pathlib import Path
 from typing import Any
 
+from dropkit.record_types import INTERFACIAL
 from record_builder import BuildError
 from record_builder.blocks import Built, build_block
 from record_builder.points import Published
 from record_builder.statistics import Deviation
-from record_builder.subjects import Liquid, Pair, Subject
+from record_builder.subjects import Interface, Liquid, Pair, Subject
 from record_builder.toml_out import dumps
 
 __all__ = ["PROPERTIES", "build_record", "main"]
@@ -26,20 +27,34 @@ PROPERTIES = (
     *("density", "viscosity", "surface_tension", "vapour_pressure", "heat_of_vaporisation"),
     *("heat_capacity", "thermal_conductivity", "static_permittivity", "speed_of_sound"),
     *("diffusivity_in_air", "refractive_index", "electrical_conductivity"),
+    INTERFACIAL,
 )
-_HEADER = "Written by data/build/build.py from its spec; edit the spec, not this file."
+_HEADER = "Built from its spec: edit that, not this."
+
+
+# A bare pair is a mixture; two liquids in contact are named with their folder.
+_CONTACT = "interfaces/"
 
 
 def _folder(name: str) -> str:
+    if name.startswith(_CONTACT):
+        return "interfaces"
     return "mixtures" if "__" in name else "liquids"
 
 
 def _subject(name: str, spec: Mapping[str, Any], data: Path) -> Subject:
-    if _folder(name) == "mixtures":
-        if "__".join(spec.get("components", [])) != name:
-            raise BuildError(f"{name}: components do not make that name")
+    folder = _folder(name)
+    if folder == "liquids":
+        return Liquid(name, spec)
+    components = spec.get("components", [])
+    if "__".join(components) != name.removeprefix(_CONTACT):
+        raise BuildError(f"{name}: components do not make that name")
+    if folder == "mixtures":
         return Pair(name, spec, data / "liquids")
-    return Liquid(name, spec)
+    for key in components:
+        if not (data / "liquids" / f"{key}.toml").exists():
+            raise BuildError(f"{name}: {key} has no record yet; build the liquid before")
+    return Interface(name, spec)
 
 
 def build_record(name: str, data: Path) -> list[str]:
@@ -48,7 +63,8 @@ def build_record(name: str, data: Path) -> list[str]:
     Nothing is written unless every block of the spec stands.
     """
     folder = _folder(name)
-    path = data / "build" / "specs" / folder / f"{name}.toml"
+    stem = name.removeprefix(_CONTACT)
+    path = data / "build" / "specs" / folder / f"{stem}.toml"
     if not path.exists():
         return [f"{name}: there is no spec {path.relative_to(data)}"]
     with path.open("rb") as handle:
@@ -72,7 +88,7 @@ def build_record(name: str, data: Path) -> list[str]:
     record = {key: value for key, value in spec.items() if key not in PROPERTIES}
     for prop, built_blocks in blocks.items():
         record[prop] = [built.record for built in built_blocks]
-    target = data / folder / f"{name}.toml"
+    target = data / folder / f"{stem}.toml"
     target.write_text(dumps(record, _HEADER), encoding="utf-8")
     _report(name, blocks, data)
     return []
@@ -80,7 +96,7 @@ def build_record(name: str, data: Path) -> list[str]:
 
 def _report(name: str, blocks: Mapping[str, list[Built]], data: Path) -> None:
     folder = data / "build" / "residuals"
-    folder.mkdir(exist_ok=True)
+    (folder / f"{name}.csv").parent.mkdir(parents=True, exist_ok=True)
     with (folder / f"{name}.csv").open("w", encoding="utf-8", newline="") as handle:
         writer = csv.writer(handle, lineterminator="\n")
         header = "property,block,source,T_K,mass_fraction_1,value,fitted,deviation_percent,role"
@@ -118,8 +134,8 @@ def _row(deviation: Deviation) -> list[str]:
 def _names(data: Path) -> list[str]:
     specs = data / "build" / "specs"
     return [
-        path.stem
-        for folder in ("liquids", "mixtures")
+        (_CONTACT if folder == "interfaces" else "") + path.stem
+        for folder in ("liquids", "mixtures", "interfaces")
         for path in sorted((specs / folder).glob("*.toml"))
     ]
 
@@ -160,7 +176,7 @@ def main(arguments: Sequence[str], data: Path) -> int:
             print(f"{name}: NOT WRITTEN")
             print("\n".join(f"  {problem}" for problem in problems))
         else:
-            written.append(f"{_folder(name)}/{name}")
+            written.append(f"{_folder(name)}/{name.removeprefix(_CONTACT)}")
             print(f"{name}: written")
             print("\n".join(_lines(name, data)))
     if written and importlib.util.find_spec("dropkit.records") is not None:

@@ -2,14 +2,15 @@
 
 from __future__ import annotations
 
-import csv
 import math
 import tomllib
-from collections.abc import Iterable, Mapping, Sequence
+from collections.abc import Mapping, Sequence
 from dataclasses import dataclass, replace
 from pathlib import Path
 from typing import Any
 
+from dropkit.published_rows import published_file
+from dropkit.record_types import INTERFACIAL
 from record_builder import BuildError
 
 __all__ = ["Point", "Published", "mass_fraction", "within"]
@@ -59,12 +60,6 @@ def mass_fraction(fraction: float, basis: str, molar_masses: tuple[float, float]
     raise BuildError(f"basis {basis!r} of a published point; allowed: mass, mole")
 
 
-def _rows(path: Path) -> Iterable[dict[str, str]]:
-    with path.open(encoding="utf-8", newline="") as handle:
-        lines = (line for line in handle if not line.startswith("#") and line.strip())
-        yield from csv.DictReader(lines)
-
-
 def _number(text: str, path: Path, column: str) -> float:
     try:
         value = float(text)
@@ -81,7 +76,8 @@ class Published:
     def __init__(self, folder: Path) -> None:
         self.folder = folder
         listed = folder / "excluded.csv"
-        self.exclusions = list(_rows(listed)) if listed.exists() else []
+        self.exclusions = published_file(listed) if listed.exists() else []
+        self._rows: dict[str, list[dict[str, str]]] = {}
 
     def origins(self, key: str) -> set[str]:
         """A source and everything that it is based on, by the files in `data/sources`."""
@@ -131,16 +127,22 @@ class Published:
         names: tuple[str, ...],
         molar_masses: tuple[float, float] | None = None,
     ) -> list[Point]:
-        """All points of one property of a liquid, or of a pair, in one file."""
+        """All points of one property of a liquid, of a pair or of an interface, in one file."""
         path = self.folder / f"{file}.csv"
         if not path.exists():
             raise BuildError(f"no published file {file}.csv")
         found = []
-        for row in _rows(path):
-            if row["property"] != prop:
+        if file not in self._rows:
+            self._rows[file] = published_file(path, file)
+        for row in self._rows[file]:
+            # Files of interfaces hold one property, and have no column for it.
+            if row.get("property", INTERFACIAL) != prop:
                 continue
             fraction = listed = math.nan
-            if len(names) == 1:
+            if prop == INTERFACIAL:
+                if (row["liquid_1"], row["liquid_2"]) != names:
+                    continue
+            elif len(names) == 1:
                 if row["liquid"] != names[0]:
                     continue
             else:

@@ -22,9 +22,9 @@ from record_builder.fitting import (
 )
 from record_builder.forms import Array, Parameters, evaluate
 from record_builder.points import Point
-from record_builder.solutes import SOLUTE_FORMS
+from record_builder.solutes import SOLUTE_FITS, SOLUTE_FORMS
 
-__all__ = ["Liquid", "Pair", "Subject", "Pure", "columns_of"]
+__all__ = ["Interface", "Liquid", "Pair", "Subject", "Pure", "columns_of"]
 
 # Transform and basis of the mixture form: one rule per property, so that pairs can be added up.
 RULES = {
@@ -98,7 +98,7 @@ class Subject:
 
     @property
     def metal(self) -> bool:
-        return self.data.get("family") == "metal"
+        return self.data.get("family") in ("metal", "alloy")
 
     def usable(self, prop: str, points: Sequence[Point]) -> list[bool]:
         """Which points can enter a fit or a comparison."""
@@ -133,6 +133,15 @@ class Liquid(Subject):
         self, prop: str, form: str, parameters: Mapping[str, Any], T: Array, w: Array
     ) -> Array:
         return evaluate(form, parameters, T)
+
+
+@dataclass(frozen=True)
+class Interface(Liquid):
+    """Two liquids in contact, keys alphabetical: a function of temperature, as of a pure liquid."""
+
+    @property
+    def names(self) -> tuple[str, ...]:
+        return tuple(self.data["components"])
 
 
 @dataclass(frozen=True)
@@ -176,6 +185,17 @@ class Pair(Subject):
     def _end_values(self, prop: str, T: Array) -> tuple[Array, Array]:
         return self.ends[0].value(prop, T), self.ends[1].value(prop, T)
 
+    def _dissolved(self, w: Array) -> tuple[Array, Pure, tuple[float, float]]:
+        """Mass fraction of the solute, the solvent, and the molar masses of the two.
+
+        The solute is the component without values of its own; the other one is the solvent.
+        """
+        second_is_solute = self.ends[1].solute
+        solvent = self.ends[0 if second_is_solute else 1]
+        solute = self.ends[1 if second_is_solute else 0]
+        fraction = 1.0 - w if second_is_solute else w
+        return fraction, solvent, (solute.molar_mass, solvent.molar_mass)
+
     def usable(self, prop: str, points: Sequence[Point]) -> list[bool]:
         T, w, _, _ = arrays(points)
         good = (w > 1e-7) & (w < 1.0 - 1e-7)
@@ -186,6 +206,14 @@ class Pair(Subject):
 
     def fit(self, prop: str, block: Mapping[str, Any], points: Sequence[Point]) -> Parameters:
         T, w, y, weights = arrays(points)
+        if block.get("form") in SOLUTE_FITS:
+            roots = balanced(
+                weights, [point.source for point in points], bool(block.get("balance", False))
+            )
+            solute, solvent, masses = self._dissolved(w)
+            return SOLUTE_FITS[block["form"]](
+                block, T, solute, y, solvent.value(prop, T), masses, roots, f"{self.name}: {prop}"
+            )
         if prop not in RULES:
             raise BuildError(f"{self.name}: no mixing rule for {prop}; known: {', '.join(RULES)}")
         transform, basis = RULES[prop]
@@ -208,12 +236,7 @@ class Pair(Subject):
         self, prop: str, form: str, parameters: Mapping[str, Any], T: Array, w: Array
     ) -> Array:
         if form in SOLUTE_FORMS:
-            # The solute is the component without values of its own; the other one is the solvent.
-            second_is_solute = self.ends[1].solute
-            solute = 1.0 - w if second_is_solute else w
-            solvent = self.ends[0 if second_is_solute else 1]
-            solute_end = self.ends[1 if second_is_solute else 0]
-            masses = (solute_end.molar_mass, solvent.molar_mass)
+            solute, solvent, masses = self._dissolved(w)
             return SOLUTE_FORMS[form](parameters, T, solute, solvent.value(prop, T), masses)
         if form != "redlich_kister":
             raise BuildError(f"{self.name}: form {form!r} is none of a mixture")

@@ -53,6 +53,8 @@ def _table(data: Mapping[str, Any], path: str, lines: list[str]) -> None:
         # Short tables below the top level read better inline (second, left_out, checks).
         if not path and (isinstance(value, Mapping) or tables):
             later.append((key, value))
+        elif value == [] and path:
+            continue  # what a block may leave out
         else:
             lines.append(f"{_key(key)} = {_scalar(value)}")
     for key, value in later:

@@ -20,13 +20,25 @@ from dropkit.properties.engines.engine_choice import (
     engine_curves,
     engine_properties,
 )
+from dropkit.properties.engines.engine_records import (
+    engine_blocks,
+    engine_bodies,
+    engine_liquid,
+    why_not,
+    why_nothing,
+)
 from dropkit.properties.engines.engine_types import EngineCurve, check_cas
 
 __all__ = [
     "EngineCurve",
     "check_cas",
+    "engine_blocks",
+    "engine_bodies",
     "engine_boiling_point",
     "engine_curve",
     "engine_curves",
+    "engine_liquid",
     "engine_properties",
+    "why_nothing",
+    "why_not",
 ]

@@ -8,6 +8,8 @@ infinity into arrays where it raises for a float.
 from __future__ import annotations
 
 import json
+import re
+import sys
 from collections.abc import Mapping
 from functools import cache
 from typing import Any, Final, NamedTuple
@@ -65,6 +67,12 @@ class CoolPropFluid(NamedTuple):
         Property to CoolProp's key of the paper behind it; only properties that it has.
     kinds : mapping
         ``viscosity`` and ``thermal_conductivity`` to the kind of model, where it has one name.
+    formula : str
+        Molecular formula.
+    molar_mass : float
+        [kg/mol].
+    melting_point : float
+        Triple point [K], within some hundredths of a kelvin of the melting point at 1 atm.
     """
 
     name: str
@@ -72,11 +80,23 @@ class CoolPropFluid(NamedTuple):
     critical_temperature: float
     papers: Mapping[str, str]
     kinds: Mapping[str, str]
+    formula: str
+    molar_mass: float
+    melting_point: float
 
 
 @cache
 def _engine() -> Any:
-    """CoolProp's module of functions; imported at first use, which takes a second."""
+    """CoolProp's module of functions; imported at first use, which takes seconds and says so."""
+    if "CoolProp.CoolProp" not in sys.modules:
+        # Imported here: only the first use needs it. A line of the log, because a warning would
+        # stop programs that turn warnings into errors.
+        import logging
+
+        logging.getLogger("dropkit").warning(
+            "dropkit asks the engine CoolProp for the first time: importing it takes seconds, "
+            "once in a process"
+        )
     try:
         import CoolProp.CoolProp as engine
     except ImportError as error:
@@ -124,7 +144,17 @@ def _described(cas: str) -> CoolPropFluid | None:
     critical = fluid["STATES"]["critical"]["T"]
     # Some equations end above the triple point.
     low = max(equation["Ttriple"], equation["STATES"]["sat_min_liquid"]["T"])
-    return CoolPropFluid(name, low, critical, papers, kinds)
+    formula = re.sub(r"[_{}]", "", fluid["INFO"]["FORMULA"])
+    return CoolPropFluid(
+        name,
+        low,
+        critical,
+        papers,
+        kinds,
+        formula,
+        float(equation["molar_mass"]),
+        float(equation["Ttriple"]),
+    )
 
 
 def coolprop_fluid(cas: str) -> CoolPropFluid | None:

@@ -21,7 +21,13 @@ from dropkit.properties.engines.thermo_adapter import METHODS, REFUSED, handbook
 from dropkit.properties.property_words import PROPERTIES, property_name
 from dropkit.validity import Range
 
-__all__ = ["engine_boiling_point", "engine_curve", "engine_curves", "engine_properties"]
+__all__ = [
+    "chosen_curve",
+    "engine_boiling_point",
+    "engine_curve",
+    "engine_curves",
+    "engine_properties",
+]
 
 # A method whose range holds this temperature goes before one whose range doesn't.
 _ROOM: Final = 298.15  # K
@@ -86,6 +92,17 @@ def engine_curve(cas: str, prop: str, *, method: str | None = None) -> EngineCur
     >>> curve.method, curve.grade, round(1e3 * curve.scalar(298.15), 2)
     ('DIPPR_PERRY_8E', 'single', 0.54)
     """
+    return _with_phase(chosen_curve(cas, prop, method))
+
+
+def chosen_curve(cas: str, prop: str, method: str | None = None) -> EngineCurve:
+    """What `engine_curve` gives, without its caution about the boiling point.
+
+    Parameters
+    ----------
+    cas, prop, method : str
+        As `engine_curve` takes them.
+    """
     check_cas(cas)
     property_name(prop)
     if method is not None:
@@ -101,7 +118,7 @@ def engine_curve(cas: str, prop: str, *, method: str | None = None) -> EngineCur
             f"No trustworthy {prop} of {cas} ({chosen.name}) from an engine: {contradiction}",
             hint="engine_curves() gives both; measured values go in with dropkit.fluid()",
         )
-    return _with_phase(chosen)
+    return chosen
 
 
 def engine_curves(cas: str, prop: str) -> tuple[EngineCurve, ...]:

@@ -16,7 +16,15 @@ from typing import Final, NamedTuple
 from dropkit.errors import EngineError
 from dropkit.records import LOCK
 
-__all__ = ["TABLES", "HandbookTable", "handbook_row", "handbook_versions", "molar_mass_of"]
+__all__ = [
+    "TABLES",
+    "HandbookTable",
+    "Identity",
+    "handbook_row",
+    "handbook_versions",
+    "identity_of",
+    "molar_mass_of",
+]
 
 
 class HandbookTable(NamedTuple):
@@ -117,11 +125,33 @@ TABLES: Final[dict[str, HandbookTable]] = {
     ),
 }
 
-# Files of identifiers (tab-separated, no header: number, CAS, formula, molar mass, ...).
+# Files of identifiers (tab-separated, no header: number, CAS, formula, molar mass, three codes,
+# systematic name, usual name, ...).
 _IDENTIFIERS: Final = (
     "chemical identifiers pubchem small.tsv",
     "chemical identifiers example user db.tsv",
+    "Inorganic db.tsv",
 )
+# Searched as it lies, for the rare ones: 40 MB.
+_MORE_IDENTIFIERS: Final = "chemical identifiers pubchem large.tsv"
+
+
+class Identity(NamedTuple):
+    """What a CAS number stands for, as the engine's files of identifiers have it.
+
+    Parameters
+    ----------
+    name : str
+        The usual name.
+    formula : str
+        Molecular formula.
+    molar_mass : float
+        [kg/mol].
+    """
+
+    name: str
+    formula: str
+    molar_mass: float
 
 
 @cache
@@ -215,13 +245,62 @@ def handbook_row(key: str, cas: str) -> Mapping[str, str] | None:
 
 
 @cache
-def _molar_masses() -> Mapping[str, str]:
+def _identifiers() -> Mapping[str, str]:
+    """CAS number -> line of the files of identifiers."""
     found: dict[str, str] = {}
     for file in _IDENTIFIERS:
         for line in _lines("Identifiers", file):
-            _, cas, _, mass, _ = line.split("\t", 4)
-            found.setdefault(cas, mass)
+            found.setdefault(line.split("\t", 2)[1], line)
     return found
+
+
+def _rare(cas: str) -> str | None:
+    """The line of a CAS number in the large file of identifiers, found without reading it all."""
+    import mmap
+
+    path = os.path.join(_folder(), "Identifiers", _MORE_IDENTIFIERS)
+    wanted = f"\t{cas}\t".encode()
+    try:
+        with open(path, "rb") as file, mmap.mmap(file.fileno(), 0, access=mmap.ACCESS_READ) as text:
+            place = text.find(wanted)
+            while place >= 0:
+                start = text.rfind(b"\n", 0, place) + 1
+                # A synonym further on in the line of another chemical does not count.
+                if b"\t" not in text[start:place]:
+                    return text[start : text.find(b"\n", place)].decode("utf-8")
+                place = text.find(wanted, place + 1)
+    except (OSError, ValueError) as error:
+        raise EngineError(
+            f"thermo {handbook_versions()}: its file '{_MORE_IDENTIFIERS}' cannot be read ({error})"
+        ) from None
+    return None
+
+
+@cache
+def identity_of(cas: str) -> Identity | None:
+    """Name, formula and molar mass of a chemical, or None where no file has it.
+
+    Parameters
+    ----------
+    cas : str
+        CAS registry number, already checked.
+
+    Raises
+    ------
+    EngineError
+        If a file of identifiers cannot be read.
+
+    Examples
+    --------
+    >>> identity_of("110-82-7").formula
+    'C6H12'
+    """
+    with LOCK:
+        line = _identifiers().get(cas) or _rare(cas)
+    if line is None:
+        return None
+    parts = line.split("\t")
+    return Identity(parts[8] or parts[7], parts[2], float(parts[3]) * 1e-3)
 
 
 def molar_mass_of(cas: str) -> float | None:
@@ -241,5 +320,5 @@ def molar_mass_of(cas: str) -> float | None:
     if row is not None:
         return float(row["MW"]) * 1e-3
     with LOCK:
-        mass = _molar_masses().get(cas)
-    return None if mass is None else float(mass) * 1e-3
+        line = _identifiers().get(cas)
+    return None if line is None else float(line.split("\t", 4)[3]) * 1e-3

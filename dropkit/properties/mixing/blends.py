@@ -9,7 +9,7 @@ from __future__ import annotations
 from collections.abc import Callable, Sequence
 from functools import cache
 from itertools import combinations, pairwise
-from typing import Any, Final
+from typing import Any
 
 import numpy as np
 
@@ -20,18 +20,18 @@ from dropkit.properties.curves import Curve, FloatArray, stepwise
 from dropkit.properties.mixing.estimates import estimate_error, share_factor
 from dropkit.properties.mixing.pair import Pair, share_of
 from dropkit.properties.mixing.redlich_kister import RULES, collapse, reduced_temperature
-from dropkit.properties.mixing.salting import salted
+from dropkit.properties.mixing.salting import (
+    SOLUTE_FORMS,
+    limiting_share,
+    rules_apart,
+    salted,
+    untested,
+)
 from dropkit.provenance import GRADES
 from dropkit.records import LiquidRecord, PropertyRecord
 from dropkit.validity import Range
 
 __all__ = ["Blend", "blend"]
-
-_SALT_FORMS: Final = {
-    "density": "laliberte_density",
-    "viscosity": "laliberte_viscosity",
-    "surface_tension": "dutcher_surface_tension",
-}
 
 
 @cache
@@ -67,7 +67,7 @@ class Blend:
         self.records = [entries[i] for i in self.solvents]
         if not self.solvents:
             raise MissingProperty(
-                f"{entries[0].name} is a solid: a mixture needs a liquid to dissolve it in"
+                f"{entries[0].name} is a solute: a mixture needs a liquid to dissolve it in"
             )
         for entry in self.records:
             if prop not in entry.properties:
@@ -109,7 +109,7 @@ class Blend:
         found = records.pair_record(salt.key, "water")
         blocks = found.properties.get(self.property, ()) if found else ()
         water = any(entry.key == "water" for entry in self.records)
-        if not blocks or not water or blocks[0].form != _SALT_FORMS.get(self.property):
+        if not blocks or not water or blocks[0].form not in SOLUTE_FORMS.get(self.property, ()):
             where = "" if water else " in a solvent without water"
             raise MissingProperty(
                 f"No record says what {salt.name} does to {self.property}{where}",
@@ -142,8 +142,9 @@ class Blend:
     # ------------------------------------------------ what is known of it
     @property
     def estimated(self) -> bool:
-        """Whether any pair enters without a record."""
-        return bool(self.unfitted) or (bool(self.solutes) and len(self.solvents) > 1)
+        """Whether any pair enters without a record, or several solutes by an untested rule."""
+        mixed = bool(self.solutes) and len(self.solvents) > 1
+        return bool(self.unfitted) or mixed or untested(self)
 
     def range(self, mass: Sequence[Any]) -> Range:
         """Temperatures that all that enters can serve, at one composition or an array of them."""
@@ -179,9 +180,10 @@ class Blend:
             low, high = block.parameters.get("fraction_range", (0.0, 1.0))
             salt = self.keys[number].replace("_", " ")
             name = f"mass fraction of {salt} in {salt} + water"
+            if self.keys[number] > "water":  # the record counts its first component
+                low, high = round(1.0 - high, 9), round(1.0 - low, 9)
             limits = Range(float(low), float(high), name, "")
-            solutes = sum(mass[i] for i in self.solutes)
-            found.append((share_of(solutes, mass[self.keys.index("water")]), limits))
+            found.append((limiting_share(self, number, mass), limits))
         return found
 
     def unserved(self, mass: Sequence[Any], temperature: Any) -> Any:
@@ -250,6 +252,10 @@ class Blend:
             found.append(share * estimate_error(self.property, with_water=watery))
         if self.solutes and len(self.solvents) > 1:
             found.append(self._salt_effect(mass, temperature))
+        elif untested(self):
+            limits = self.range(mass)
+            middle = 0.5 * (limits.low + limits.high) if temperature is None else temperature
+            found.append(rules_apart(self, mass, middle))
         return max(found)
 
     def _salt_effect(self, mass: Sequence[Any], temperature: Any) -> float:

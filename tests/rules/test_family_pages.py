@@ -1,0 +1,47 @@
+"""The pages of docs/families are what their writer makes of the records as they are now."""
+
+from __future__ import annotations
+
+import importlib.util
+from pathlib import Path
+from types import ModuleType
+
+import pytest
+
+import dropkit as dk
+from dropkit.record_types import LEADING
+
+FOLDER = Path(__file__).resolve().parents[2] / "docs" / "families"
+
+
+def _writer() -> ModuleType:
+    found = importlib.util.spec_from_file_location("write_pages", FOLDER / "write_pages.py")
+    assert found is not None
+    assert found.loader is not None
+    module = importlib.util.module_from_spec(found)
+    found.loader.exec_module(module)
+    return module
+
+
+PAGES: dict[str, str] = _writer().pages()
+
+
+@pytest.mark.parametrize("name", sorted(PAGES))
+def test_a_page_says_what_the_records_say(name: str) -> None:
+    assert (FOLDER / name).read_text(encoding="utf-8") == PAGES[name], (
+        "run: python docs/families/write_pages.py"
+    )
+
+
+def test_there_is_no_page_too_many() -> None:
+    assert {path.name for path in FOLDER.glob("*.md")} == set(PAGES)
+
+
+def test_every_liquid_has_its_picture_and_no_other_has() -> None:
+    table = dk.liquids()
+    wanted = {
+        key
+        for key, row in table[table["kind"] == "liquid"].iterrows()
+        if any(isinstance(row[name], str) for name in LEADING)
+    }
+    assert {path.stem for path in (FOLDER / "pictures").glob("*.png")} == wanted
