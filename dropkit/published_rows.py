@@ -14,7 +14,7 @@ from typing import Final
 
 from dropkit.errors import RecordError
 
-__all__ = ["ABSENT", "MARK", "VALUE", "mark_of", "published_file", "filled_rows"]
+__all__ = ["ABSENT", "MARK", "VALUE", "filled_rows", "is_mark", "mark_of", "published_file"]
 
 # The comment line, and how a row under it says that it has no doi.
 MARK: Final = "# empty cells: as in the row above"
@@ -33,6 +33,17 @@ def mark_of(columns: Sequence[str]) -> str:
     '# empty cells of file, reason: as in the row above'
     """
     return MARK.replace(":", f" of {', '.join(columns)}:")
+
+
+def is_mark(line: str) -> bool:
+    """Whether a line says that empty cells repeat the row above.
+
+    Examples
+    --------
+    >>> is_mark(MARK), is_mark("# note: empty cells were not measured")
+    (True, False)
+    """
+    return _MARK.fullmatch(line) is not None
 
 
 def filled_rows(lines: Iterable[str], name: str = "") -> list[dict[str, str]]:

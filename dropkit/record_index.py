@@ -22,6 +22,7 @@ __all__ = [
     "build_selection",
     "fold",
     "index_text",
+    "read_index",
     "read_selection",
     "selection_text",
 ]
@@ -232,7 +233,9 @@ def _lines(entries: Mapping[str, Any]) -> str:
 
 
 def index_text(content: Mapping[str, Any]) -> str:
-    """The text of ``data/index.json``, one line for each liquid, mixture and name.
+    """The text of ``data/index.json``, one line for each liquid and mixture.
+
+    ``names`` stand the other way round, so that each key is written once.
 
     Parameters
     ----------
@@ -244,19 +247,50 @@ def index_text(content: Mapping[str, Any]) -> str:
     str
         JSON without spaces.
     """
+    owned: dict[str, list[str]] = {}
+    for name, key in content["names"].items():
+        owned.setdefault(key, []).append(name)
     parts = [
         f"{_short_json(key)}:{_lines(part) if isinstance(part, Mapping) else _short_json(part)}"
-        for key, part in content.items()
+        for key, part in {**content, "names": dict(sorted(owned.items()))}.items()
     ]
     return "{" + ",\n".join(parts) + "}\n"
+
+
+def read_index(text: bytes) -> dict[str, Any]:
+    """What `index_text` wrote.
+
+    Parameters
+    ----------
+    text : bytes
+        The text of the file.
+
+    Returns
+    -------
+    dict
+        The content, as `build_index` gives it.
+
+    Raises
+    ------
+    ValueError, LookupError, TypeError, AttributeError
+        If it isn't such a text.
+    """
+    import json
+
+    content: dict[str, Any] = json.loads(text)
+    owned = content["names"].items()
+    if not all(isinstance(names, list) for _, names in owned):
+        raise ValueError("names stand the other way round")
+    content["names"] = {name: key for key, names in owned for name in names}
+    return content
 
 
 def selection_text(content: Mapping[str, Any]) -> str:
     """The text of ``data/selection.json``: checksums, then one line for each liquid.
 
-    What blocks have in common is said once: ``kinds`` lists form, names of the parameters and
-    grade; a block is the number of its kind, the parameters, range and uncertainties. Constants
-    stand in the order of `CHOSEN_BY`.
+    What blocks have in common is said once: ``kinds`` lists property, form, names of the
+    parameters and grade; a block is the number of its kind, the parameters, range and
+    uncertainties. Constants stand in the order of `CHOSEN_BY`.
 
     Parameters
     ----------
@@ -271,19 +305,17 @@ def selection_text(content: Mapping[str, Any]) -> str:
     kinds: dict[tuple[Any, ...], int] = {}
     short = {}
     for key, entry in content["liquids"].items():
-        properties = {
-            name: [
-                [
-                    kinds.setdefault((form, tuple(parameters), grade), len(kinds)),
-                    list(parameters.values()),
-                    *(numbers if numbers[-1] is not None else numbers[:-1]),
-                ]
-                for form, parameters, *numbers, grade in blocks
+        blocks = [
+            [
+                kinds.setdefault((name, form, tuple(parameters), grade), len(kinds)),
+                list(parameters.values()),
+                *(numbers if numbers[-1] is not None else numbers[:-1]),
             ]
-            for name, blocks in entry["properties"].items()
-        }
+            for name, several in entry["properties"].items()
+            for form, parameters, *numbers, grade in several
+        ]
         constants = [entry["constants"].get(name) for name in CHOSEN_BY]
-        short[key] = [constants, entry.get("method"), properties]
+        short[key] = [constants, entry.get("method"), blocks]
     body = f'"kinds":{_short_json(list(kinds))},\n"liquids":{_lines(short)}}}\n'
     head = f'"note":{_short_json(NOTE)},"records":{_short_json(content["records"])}'
     return f'{{{head},"seal":"{_checksum(body.encode())}",\n{body}'
@@ -317,20 +349,21 @@ def read_selection(text: bytes, records: str) -> dict[str, dict[str, Any]] | Non
         return None
     kinds = content["kinds"]
     found = {}
-    for key, (constants, method, properties) in content["liquids"].items():
+    for key, (constants, method, blocks) in content["liquids"].items():
         named = zip(CHOSEN_BY, constants, strict=True)
         entry: dict[str, Any] = {"constants": {k: v for k, v in named if v is not None}}
         if method is not None:
             entry["method"] = method
-        for blocks in properties.values():
-            for block in blocks:
-                form, names, grade = kinds[block[0]]
-                if len(block) == 5:
-                    block.append(None)
-                # In place, as thousands of blocks are read by the first choice of a process.
-                block[0] = form
-                block[1] = dict(zip(names, block[1], strict=True))
-                block.append(grade)
+        properties: dict[str, list[Any]] = {}
+        for block in blocks:
+            name, form, names, grade = kinds[block[0]]
+            if len(block) == 5:
+                block.append(None)
+            # In place, as thousands of blocks are read by the first choice of a process.
+            block[0] = form
+            block[1] = dict(zip(names, block[1], strict=True))
+            block.append(grade)
+            properties.setdefault(name, []).append(block)
         entry["properties"] = properties
         found[key] = entry
     return found

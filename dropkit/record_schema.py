@@ -274,11 +274,11 @@ def _left_out(reader: _Reader | None) -> Table | None:
     if reader is None:
         return None
     reader.only(("how", "median", "p95", "worst", "points", "note"))
-    reader.text("how")
+    how = reader.text("how", "every fifth point")
     reader.number("median")
     for key in ("p95", "worst", "points"):
         reader.number(key, required=False)
-    return Table(reader.data)
+    return Table({"how": how, **reader.data})
 
 
 def read_liquid(key: str, data: Mapping[str, Any]) -> LiquidRecord:

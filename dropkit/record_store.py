@@ -15,7 +15,13 @@ from typing import Any, Final, TypeVar
 
 from dropkit.errors import RecordError, UnknownName, nearest
 from dropkit.provenance import Source
-from dropkit.record_index import build_index, build_selection, fold, read_selection
+from dropkit.record_index import (
+    build_index,
+    build_selection,
+    fold,
+    read_index,
+    read_selection,
+)
 from dropkit.record_schema import read_interface, read_liquid, read_pair, read_source
 from dropkit.record_thickeners import read_thickener
 from dropkit.record_types import LiquidRecord, PairRecord, Table, ThickenerRecord
@@ -269,15 +275,13 @@ class Store:
         return found
 
     def _read_index(self) -> Mapping[str, Any] | None:
-        import json
-
         try:
             with open(os.path.join(self.root, INDEX), "rb") as file:
-                content = json.loads(file.read())
+                content = read_index(file.read())
             fits = all(
                 content[folder].keys() == self.stems(folder) for folder in ("liquids", "mixtures")
             )
-            return content if fits and isinstance(content["names"], dict) else None
+            return content if fits else None
         except (OSError, ValueError, LookupError, TypeError, AttributeError):
             return None
 

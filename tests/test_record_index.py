@@ -9,7 +9,14 @@ import made_up_records as made_up
 import pytest
 
 from dropkit import records, sealing
-from dropkit.record_index import CHOSEN_BY, build_selection, read_selection, selection_text
+from dropkit.record_index import (
+    CHOSEN_BY,
+    build_selection,
+    index_text,
+    read_index,
+    read_selection,
+    selection_text,
+)
 from dropkit.record_store import SELECTION, Store
 
 
@@ -60,14 +67,18 @@ def test_one_line_per_liquid_behind_a_checksum(folder: Path) -> None:
     text = (folder / SELECTION).read_text(encoding="utf-8")
     head, kinds, opening, *lines = text.splitlines()
     assert list(json.loads(head.removesuffix(",") + "}")) == ["note", "records", "seal"]
-    assert ["vogel", ["coefficients"], "single"] in json.loads(f"{{{kinds[:-1]}}}")["kinds"]
+    assert ["viscosity", "vogel", ["coefficients"], "single"] in json.loads(f"{{{kinds[:-1]}}}")[
+        "kinds"
+    ]
     assert opening == '"liquids":{'
     assert [line.partition(":")[0] for line in lines] == ['"alpha"', '"beta"', "}}"]
 
 
 def test_what_is_written_is_read_again(folder: Path) -> None:
     store = Store(str(folder))
-    selection = store.scan_all()[1]
+    index, selection = store.scan_all()
+    assert index_text(index).encode() == (folder / "index.json").read_bytes()
+    assert read_index(index_text(index).encode()) == index == store.index()
     text = selection_text(selection).encode()
     assert text == (folder / SELECTION).read_bytes()
     held = read_selection(text, selection["records"])

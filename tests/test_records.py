@@ -243,7 +243,7 @@ BROKEN = [
     ('source = "Cook1903", place', "place", "check 1: source: is missing"),
     ("checks = [{ T = 300.0,", "checks = [{ T = 300.0, p = 1,", "check 1: p: is not known"),
     ("median = 0.0001, ", "", "second: median: is missing"),
-    ('how = "source Baker1902 left out", ', "", "left_out: how: is missing"),
+    ('how = "source Baker1902 left out", ', "how = 3, ", "left_out: how: is 3"),
 ]
 
 
@@ -260,10 +260,13 @@ def test_what_a_block_may_leave_out(folder: Path, stated: str, expected: float) 
     made_up.edit(folder, name, "uncertainty = 0.001", stated)
     made_up.edit(folder, name, ', place = "Table 2", tolerance = 0.001 }]', " }]")
     made_up.edit(folder, name, 'obtained = "fitted here to 3 points"\n', "")
+    made_up.edit(folder, name, 'how = "source Baker1902 left out", ', "")
     made_up.edit(folder, name, '["liquids/Able1901"]', '["Able1901", "mixtures/Able1901"]')
     made_up.reseal(folder, name)
     density = Store(str(folder)).liquid("alpha").properties["density"][0]
     assert density.obtained == "as published"
+    assert density.left_out is not None
+    assert density.left_out["how"] == "every fifth point"
     assert density.points == ("liquids/Able1901", "mixtures/Able1901")
     assert density.checks[0]["tolerance"] == pytest.approx(expected, rel=1e-12)
 
@@ -511,11 +514,18 @@ def test_a_file_that_is_gone_is_not_listed(folder: Path) -> None:
 
 @pytest.mark.parametrize("content", [None, b"", b"{", b"[]", b"{}", b'{"liquids": 3}', b"\xff"])
 def test_without_a_good_index_the_files_are_read(folder: Path, content: bytes | None) -> None:
-    good = json.loads((folder / "index.json").read_bytes())
+    good = Store(str(folder)).index()
     if content is None:
         (folder / "index.json").unlink()
     else:
         (folder / "index.json").write_bytes(content)
+    assert Store(str(folder)).index() == good
+
+
+def test_names_the_other_way_round_are_not_believed(folder: Path) -> None:
+    good = Store(str(folder)).index()
+    turned = {**json.loads((folder / "index.json").read_bytes()), "names": dict(good["names"])}
+    (folder / "index.json").write_text(json.dumps(turned))
     assert Store(str(folder)).index() == good
 
 

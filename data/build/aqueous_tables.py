@@ -13,6 +13,8 @@ from collections.abc import Iterable, Sequence
 from math import exp
 from pathlib import Path
 
+from compact_points import compact
+
 MIXTURES = Path(__file__).resolve().parent.parent / "published" / "mixtures"
 HEADER = ["component_1", "component_2", "basis", "fraction_1", "T_K", "property", "value", "doi"]
 
@@ -126,6 +128,7 @@ def write(name: str, head: Sequence[str], rows: Iterable[Row]) -> None:
         writer = csv.writer(handle, lineterminator="\n")
         writer.writerow(HEADER)
         writer.writerows(sorted(set(rows)))
+    compact(path)
 
 
 def handbook() -> list[Row]:

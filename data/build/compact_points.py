@@ -5,7 +5,8 @@
 Without names: every long file of liquids, mixtures and interfaces in `data/published`, and the
 list of excluded points. The rows are sorted so that repeats adjoin; what was written of each number
 stays as it was, and a short file stays as it is. `--check` writes nothing and ends with 1 where a
-file is not as this would leave it. `dropkit.published_rows` reads both forms.
+file is not as this would leave it. `dropkit.published_rows` reads both forms, so other files may be
+named once nothing reads them in another way.
 """
 
 from __future__ import annotations
@@ -16,14 +17,14 @@ import sys
 from collections.abc import Sequence
 from pathlib import Path
 
-from dropkit.published_rows import ABSENT, MARK, VALUE, filled_rows, mark_of
+from dropkit.published_rows import ABSENT, MARK, VALUE, filled_rows, is_mark, mark_of
 
 __all__ = ["LEAST", "compact", "compacted", "main"]
 
 PUBLISHED = Path(__file__).resolve().parents[1] / "published"
 FOLDERS = ("liquids", "mixtures", "interfaces")
 # Bytes of a file below which the full rows stay: they are easier to add to by hand.
-LEAST = 2500
+LEAST = 1500
 # What a row is about. It is sorted by these and by its origin; rows that agree keep their order.
 # One of these is written out after another that changed, so that a new subject begins whole.
 SUBJECT = (
@@ -31,8 +32,20 @@ SUBJECT = (
     *("property", "basis"),
 )
 SORTED_BY = (*SUBJECT, "doi", "reason", "contradicting_source")
-# Of the list of excluded points; an empty cell of its other columns has a meaning.
+# What the list of excluded points leaves out; an empty cell of its other columns has a meaning.
 EXCLUDED = ("file", "component_1", "property", "reason", "contradicting_source")
+
+
+def _left_out(rows: list[dict[str, str]]) -> tuple[list[str], str]:
+    """Columns that leave out what repeats, and the comment line that says so."""
+    columns = list(rows[0])
+    if "reason" in columns:
+        return list(EXCLUDED), mark_of(EXCLUDED)
+    if VALUE in columns:
+        return [column for column in columns if column != VALUE], MARK
+    # Of any other table those columns in which every row says something.
+    filled = [column for column in columns if all(row[column] for row in rows)]
+    return filled, mark_of(filled)
 
 
 def compacted(text: str, name: str = "") -> str:
@@ -49,9 +62,6 @@ def compacted(text: str, name: str = "") -> str:
     if not rows:
         return text
     columns = list(rows[0])
-    excluded = "reason" in columns
-    shorter = [c for c in columns if (c in EXCLUDED if excluded else c != VALUE)]
-    mark = mark_of(EXCLUDED) if excluded else MARK
     for number, row in enumerate(rows, 1):
         if None in row or None in row.values():
             raise ValueError(f"{name}, row {number}: has another number of cells than the header")
@@ -59,13 +69,17 @@ def compacted(text: str, name: str = "") -> str:
             raise ValueError(f"{name}, row {number}: the doi is '{ABSENT}'")
         if "doi" in row:
             row["doi"] = row["doi"] or ABSENT
+    shorter, mark = _left_out(rows)
+    for number, row in enumerate(rows, 1):
         empty = [column for column in shorter if not row[column]]
         if empty:
             raise ValueError(f"{name}, row {number}: the column {empty[0]} is empty")
-    by = [column for column in SORTED_BY if column in columns]
-    rows.sort(key=lambda row: [row[column] for column in by])
+    if mark == MARK or mark == mark_of(EXCLUDED):
+        by = [column for column in SORTED_BY if column in columns]
+        rows.sort(key=lambda row: [row[column] for column in by])
     out = io.StringIO()
-    out.writelines(f"{line}\n" for line in [*(line for line in head if line != mark), mark])
+    comments = [line for line in head if not is_mark(line)]
+    out.writelines(f"{line}\n" for line in [*comments, mark])
     writer = csv.writer(out, lineterminator="\n")
     writer.writerow(columns)
     above: dict[str, str] = {}
@@ -82,7 +96,7 @@ def compacted(text: str, name: str = "") -> str:
 def wanted(path: Path) -> str:
     """What a file should hold: short where it is long, or short already."""
     text = path.read_text(encoding="utf-8")
-    short = MARK in text.splitlines() or len(text.encode()) > LEAST
+    short = any(map(is_mark, text.splitlines())) or len(text.encode()) > LEAST
     return compacted(text, path.stem) if short else text
 
 

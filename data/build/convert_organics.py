@@ -138,7 +138,8 @@ def evaluated(
     rows = []
     for T in grid(key, low, high, count):
         value = f(T)
-        if math.isfinite(value) and value > 0.0:
+        # A corrupt row of constants gives a viscosity that no liquid has.
+        if math.isfinite(value) and 0.0 < value < (1e3 if prop == "viscosity" else math.inf):
             rows.append([key, prop, f"{T:.2f}", f"{value:.5g}", "equation"])
     return rows
 

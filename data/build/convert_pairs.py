@@ -15,7 +15,7 @@ from decimal import Decimal
 from pathlib import Path
 
 from compact_points import compact
-from convert_organics import KEYS, PUBLISHED, QUANTITIES, Row, reference
+from convert_organics import KEYS, PUBLISHED, QUANTITIES, reference
 
 MIXTURE = ["component_1", "component_2", "basis", "fraction_1", "T_K", "property", "value", "doi"]
 PROPERTIES = QUANTITIES | {"refractive_index_nD": "refractive_index"}

@@ -5,7 +5,6 @@ Run from the checkout: python docs/img/draw_jets.py
 
 from __future__ import annotations
 
-import csv
 from pathlib import Path
 
 import matplotlib as mpl
@@ -15,6 +14,7 @@ import matplotlib.pyplot as plt
 import numpy as np
 
 from dropkit.models import jet
+from dropkit.published_rows import published_file
 from dropkit.records import data_dir
 
 STUDIES = {
@@ -63,9 +63,8 @@ def length_panel(ax: plt.Axes) -> None:
     pipe = 19.5 * inside**0.85
     ax.plot(inside, pipe, "--", color="0.3", label="laminar_pipe_breakup_length")
     for colour, (key, name) in enumerate(STUDIES.items()):
-        text = (data_dir() / "published" / "jets" / f"{key}.csv").read_text(encoding="utf-8")
-        lines = [line for line in text.splitlines() if not line.startswith("#")]
-        kept = [row for row in csv.DictReader(lines) if row["regime"] == "Rayleigh"]
+        found = published_file(data_dir() / "published" / "jets" / f"{key}.csv")
+        kept = [row for row in found if row["regime"] == "Rayleigh"]
         weber = np.array([float(row["We_d"]) for row in kept])
         reynolds = np.array([float(row["Re_d"]) for row in kept])
         length = np.array([float(row["breakup_length_over_d"]) for row in kept])

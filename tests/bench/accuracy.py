@@ -305,10 +305,10 @@ def tables() -> dict[str, pd.DataFrame]:
     }
 
 
-def page() -> str:
+def page(found: dict[str, pd.DataFrame] | None = None) -> str:
     """The page docs/accuracy.md."""
     parts = [PAGE_HEAD]
-    parts += [f"## {title}\n\n{markdown(table)}\n" for title, table in tables().items()]
+    parts += [f"## {title}\n\n{markdown(table)}\n" for title, table in (found or tables()).items()]
     return "\n".join(parts)
 
 

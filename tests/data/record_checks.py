@@ -31,7 +31,7 @@ from dropkit.record_types import (
 from dropkit.unit_table import KINDS, NOMENCLATURE
 
 sys.path.append(str(Path(__file__).resolve().parents[2] / "data" / "build"))
-from record_builder.independent import independent_points  # noqa: E402  no installed package
+from record_builder.independent import independent_points
 
 GAS_CONSTANT = 8.314462618  # J/(mol K)
 ATMOSPHERE = 101325.0  # Pa

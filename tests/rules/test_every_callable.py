@@ -63,6 +63,22 @@ BY_WORD = {
     "vapour_heat_capacity": 1900.0,
     "obstacle": 1e-3,
     "constant": 12.0,
+    "nozzle_length": 1e-3,
+    "pipe_diameter": 1e-3,
+    "edge_radius": 2e-6,
+    "diameter_tolerance": 1e-6,
+    "remaining": 0.01,
+    "ambient_pressure": 1e5,
+    "tip_diameter": 3e-3,
+    "outer_diameter": 3e-3,
+    "outer_density": 800.0,
+    "outer_viscosity": 1e-3,
+    "tip_ratio": 0.5,
+    "formation_time": 60.0,
+    "velocity_amplitude": 0.05,
+    "pressure_amplitude": 1e3,
+    "kinetic_factor": 1.5,
+    "count": 2.0,
 }
 BY_KIND = {
     "density": 1000.0,
@@ -84,6 +100,7 @@ BY_KIND = {
     "growth_rate": 5e3,
     "acceleration": 9.80665,
     "pressure": 1e5,
+    "gauge_pressure": 5e5,
     "stress": 10.0,
     "shear_rate": 1e4,
     "charge": 1e-13,
@@ -92,10 +109,23 @@ BY_KIND = {
     "mass_fraction": 0.2,
     "mass_transfer_coefficient": 0.1,
     "heat_transfer_coefficient": 100.0,
+    "volume": 4e-8,
+    "mass": 4e-5,
 }
 # Functions whose range lies apart from that jet.
 BY_FUNCTION: dict[str, dict[str, float]] = {
     "jet_diameter_turbulent_pipe": {"nozzle_diameter": 5e-3},
+    "jet_diameter_sharp_orifice": {"nozzle_diameter": 5e-3},
+    "entrance_length_turbulent": {"nozzle_diameter": 5e-3},
+    "pressure_turbulent_tube": {"nozzle_diameter": 5e-3, "nozzle_length": 0.1, "flow": 2e-4},
+    "flow_turbulent_tube": {"nozzle_diameter": 5e-3, "nozzle_length": 0.1},
+    "discharge_coefficient_thin_plate": {"nozzle_length": 3e-5},
+    "pressure_thin_plate": {"nozzle_length": 3e-5},
+    "flow_thin_plate": {"nozzle_length": 3e-5},
+    "jetting_velocity_liquid": {"drop_diameter": 5e-3},
+    "turbulent_pipe_breakup_length": {"jet_diameter": 5e-3},
+    # One of three is needed, so that one stands here although None is its default.
+    "stimulated_breakup_length": {"radius_amplitude": 1e-6},
 }
 
 
@@ -106,7 +136,7 @@ def sample(function: Boundary[..., Any]) -> dict[str, float]:
     return {
         word: own.get(word, BY_WORD.get(word, BY_KIND.get(kind, 1.0)))
         for word, kind in function.kinds.items()
-        if parameters[word].default is not None
+        if parameters[word].default is not None or word in own
     }
 
 

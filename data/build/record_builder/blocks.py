@@ -362,7 +362,9 @@ def build_block(
         record["second"] = _second(judged)
     if left:
         numbers = summary(relative(left))
-        record["left_out"] = {"how": how} | {name: numbers[name] for name in ("median", "p95")}
+        record["left_out"] = {name: numbers[name] for name in ("median", "p95")}
+        if how != "every fifth point":  # which is what a record says by silence
+            record["left_out"] = {"how": how} | record["left_out"]
     files = [p.file for p in (*chosen, *second_points) if p.file != SAMPLE]
     shown = list(spec.get("points", dict.fromkeys(files)))
     record["checks"] = given_checks(spec.get("checks", []), record, what) or chosen_checks(

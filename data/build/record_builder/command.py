@@ -29,6 +29,8 @@ PROPERTIES = (
     *("diffusivity_in_air", "refractive_index", "electrical_conductivity"),
     INTERFACIAL,
 )
+# What a record says by leaving it out.
+_BY_SILENCE = {"kind": "liquid", "amphiphile": False, "synonyms": [], "cautions": []}
 _HEADER = "Built from its spec: edit that, not this."
 
 
@@ -85,7 +87,11 @@ def build_record(name: str, data: Path) -> list[str]:
         problems.append(str(error))
     if problems:
         return problems
-    record = {key: value for key, value in spec.items() if key not in PROPERTIES}
+    record = {
+        key: value
+        for key, value in spec.items()
+        if key not in PROPERTIES and not (key in _BY_SILENCE and value == _BY_SILENCE[key])
+    }
     for prop, built_blocks in blocks.items():
         record[prop] = [built.record for built in built_blocks]
     target = data / folder / f"{stem}.toml"

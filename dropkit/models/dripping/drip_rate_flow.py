@@ -133,7 +133,7 @@ def slow_drip_flow(volume: float, formation_time: float = 60.0) -> float:
     """Flow up to which dripping counts as slow, so that the drop weight tables hold.
 
     Holds for thin liquids. At a drop per second water, ethanol and ether drops of a 3 mm tip are
-    5 to 13 % heavier than slow ones.
+    5 to 12 % heavier than slow ones.
 
     Parameters
     ----------

@@ -73,9 +73,7 @@ def drop_volume_ideal(
 
 
 @physical(returns="mass", gravity="acceleration > 0", tip_diameter="length > 0")
-def drop_mass_ideal(
-    surface_tension: float, tip_diameter: float, gravity: float = 9.80665
-) -> float:
+def drop_mass_ideal(surface_tension: float, tip_diameter: float, gravity: float = 9.80665) -> float:
     """Mass of the ideal drop from a tip, an upper limit of the real one.
 
     Holds as a limit for drops that form slowly; a real drop has 0.6 to 0.9 of this mass.

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from typing import Any, Final
+from typing import Final
 
 import numpy as np
 
@@ -25,7 +25,9 @@ MODEL: Final = Published(
 
 
 @physical(returns="length")
-def wetted_tip_diameter(nozzle_diameter: float, outer_diameter: float, *, wets: Any = True) -> float:
+def wetted_tip_diameter(
+    nozzle_diameter: float, outer_diameter: float, *, wets: bool = True
+) -> float:
     """Diameter of the circle that a drop hangs from: outer edge of a wetted tip, else the bore.
 
     Holds for level, round tips with a sharp edge. Whether a liquid wets the face is a matter of
@@ -37,7 +39,7 @@ def wetted_tip_diameter(nozzle_diameter: float, outer_diameter: float, *, wets: 
         Inner diameter of the tip [m].
     outer_diameter : float or array
         Outer diameter of the tip [m].
-    wets : bool or array of bool, keyword-only
+    wets : bool, keyword-only
         Whether the liquid wets the face of the tip; it does by default.
 
     Returns
@@ -67,9 +69,8 @@ def wetted_tip_diameter(nozzle_diameter: float, outer_diameter: float, *, wets: 
     >>> print(f"{dripping.wetted_tip_diameter('0.6 mm', '3 mm', wets=False).to('mm'):.1f}")
     0.6 millimeter
     """
-    flags = np.asarray(wets)
-    if flags.dtype != np.bool_:
-        raise BadInput(f"wets={wets!r} is neither true nor false", allowed="True, False, or an array")
+    if not isinstance(wets, (bool, np.bool_)):
+        raise BadInput(f"wets={wets!r} is neither true nor false", allowed="True or False")
     # NaN in either passes, and comes out.
     if bool(np.any(outer_diameter <= nozzle_diameter)):
         raise Unphysical(
@@ -77,13 +78,6 @@ def wetted_tip_diameter(nozzle_diameter: float, outer_diameter: float, *, wets: 
             allowed="outer_diameter > nozzle_diameter",
             hint="A tip with a sharp rim has but one diameter: use it as tip_diameter",
         )
-    if flags.ndim == 0:
-        chosen: Any = (outer_diameter if flags else nozzle_diameter) + 0.0 * (
-            nozzle_diameter + outer_diameter
-        )
-    else:
-        chosen = np.where(flags, outer_diameter, nozzle_diameter) + 0.0 * (
-            nozzle_diameter + outer_diameter
-        )
-    result: float = chosen
-    return result
+    if wets:
+        return outer_diameter + 0.0 * nozzle_diameter
+    return nozzle_diameter + 0.0 * outer_diameter

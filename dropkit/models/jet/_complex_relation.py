@@ -18,6 +18,16 @@ __all__: list[str] = []
 # Series where both arguments lie well inside the circle of |t| = 14.68.
 _INSIDE: Final = 2.6
 _CLOSE: Final = 1.0
+# Speeds from which a spatial wave is followed, stages of the speed, steps in each.
+_FAST: Final = 6.0
+_STAGES: Final = 12
+_FINE_STAGES: Final = 300
+_NEWTON: Final = 6
+# Relative last step that ends a search, and the one that passes as found.
+_ROUNDING: Final = 1e-15
+_FOUND: Final = 1e-9
+_DECAY_STEPS: Final = 60
+_SHORTEST: Final = 5.0
 
 
 def _ratio(t: Any) -> tuple[Any, Any]:
@@ -91,3 +101,103 @@ def growth_at(x: Any, w: Any, h: Any, steps: int = 12) -> Any:
         if not (np.abs(step) > 1e-15 * np.abs(w)).any():
             break
     return w
+
+
+def spatial_wave(omega: Any, h: Any, v: Any) -> Any:
+    """Complex k a at real frequency ``omega = 2 pi f a/U``: the wave downstream of its source.
+
+    A fast jet carries temporal growth along: ``x = omega - i w/v``. From there the speed falls to v
+    by stages, so that the root stays the same. What fails is tried again in smaller stages; NaN
+    where those fail too.
+    """
+    x = _followed(omega, h, v, _STAGES)
+    lost = np.isnan(x) & ~np.isnan(omega + h + v)
+    if lost.any():
+        x[lost] = _followed(omega[lost], h[lost], v[lost], _FINE_STAGES)
+    return x
+
+
+def _followed(omega: Any, h: Any, v: Any, stages: int) -> Any:
+    start = np.maximum(v, _FAST)
+    x = omega - 1j * _temporal_start(omega, h) / start
+    before = start
+    change = np.zeros_like(x)
+    for stage in range(stages + 1):
+        now = v * (start / v) ** (1.0 - stage / stages)
+        x = omega + (x - omega) * (before / now)
+        before = now
+        x, change = _newton_spatial(x, omega, h, now, _NEWTON)
+    return np.where(np.abs(change) <= _FOUND * np.abs(x), x, np.nan)
+
+
+def _newton_spatial(x: Any, omega: Any, h: Any, v: Any, steps: int) -> tuple[Any, Any]:
+    change = np.zeros_like(x)
+    for _ in range(steps):
+        w = 1j * v * (x - omega)
+        f, f_t, f_w = relation(x * x, w, h)
+        change = f / (2.0 * x * f_t + 1j * v * f_w)
+        x = x - change
+        if not (np.abs(change) > _ROUNDING * np.abs(x)).any():
+            break
+    return x, change
+
+
+def _temporal_start(x: Any, h: Any) -> Any:
+    """Weber's growth rate with the exact driving term, complex beyond the cut-off."""
+    t = x * x
+    drive = (1.0 - x) * (1.0 + x) * t / _ratio(t + 0j)[0]
+    damping = 3.0 * h * t
+    return 2.0 * drive / (damping + np.sqrt(damping * damping + 4.0 * drive))
+
+
+def decay(x: Any, h: Any) -> Any:
+    """Negative growth rate of the slowest capillary wave for 1 < x <= 5; NaN beyond."""
+    with np.errstate(all="ignore"):
+        x = np.where(x <= _SHORTEST, x, np.nan)
+        # Off the real axis, or a real start would never find a pair of complex roots.
+        w = growth_at(x + 0j, _temporal_start(x, h) * (1.0 + 0.1j), h, _DECAY_STEPS)
+        f, _, f_w = relation((x * x) + 0j, w, h)
+        return np.where(np.abs(f) <= _FOUND * np.abs(f_w * w), w.real, np.nan)
+
+
+def inviscid_turning_point(v: Any) -> tuple[Any, Any, Any]:
+    """Where two waves of an inviscid jet become one: real x, omega there, and half the curvature.
+
+    Above that omega, which is a little below 1, no wave grows along the jet.
+    """
+
+    def slope(x: Any) -> Any:
+        t = x * x
+        ratio, ratio_t = _ratio(t + 0j)
+        square = (t - 1.0) * t / ratio.real
+        change = 2.0 * x * ((2.0 * t - 1.0) / ratio - square * ratio_t / ratio).real
+        return change * change - 4.0 * v * v * square
+
+    x = between(slope, np.ones_like(v), np.full_like(v, X_CRITICAL))
+    t = x * x
+    ratio, ratio_t = _ratio(t + 0j)
+    square = ((t - 1.0) * t / ratio).real
+    return x, x - np.sqrt(square) / v, square
+
+
+def inviscid_spatial_wave(omega: Any, v: Any) -> Any:
+    """As `spatial_wave`, without viscosity, for frequencies up to the turning point."""
+    none = np.zeros_like(omega)
+    x = spatial_wave(omega, none, v)
+    turn, last, _ = inviscid_turning_point(v)
+    close = omega > _CLOSE_TO_TURN * last
+    if close.any():
+        near, there, speed = turn[close], last[close], v[close]
+        step = 1e-4 * near
+        curvature = (_mismatch(near + step, there, speed) - 2.0 * _mismatch(near, there, speed)
+                     + _mismatch(near - step, there, speed)) / (step * step)
+        push = 2.0 * speed * speed * (near - there) * (omega[close] - there)
+        start = near - 1j * np.sqrt(np.maximum(2.0 * push / curvature, 0.0))
+        found, _ = _newton_spatial(start, omega[close], none[close], speed, _DECAY_STEPS)
+        x[close] = found
+    return x
+
+
+def _mismatch(x: Any, omega: Any, v: Any) -> Any:
+    t = x * x
+    return (t - 1.0) * t / _ratio(t + 0j)[0].real - v * v * (x - omega) ** 2

@@ -213,13 +213,38 @@ def _band(h: Any, share: Any) -> tuple[Any, Any]:
 
 
 def _edge(t: Any, w: Any, h: Any, near: bool) -> Any:
+    return _newton_edge(t, w, lambda t: _parts(t, w, h, near))
+
+
+def _newton_edge(t: Any, w: Any, parts: Callable[[Any], tuple[Any, Any]]) -> Any:
+    """Newton's steps in t at constant w; no step where the relation holds to rounding."""
     for _ in range(EDGE_STEPS):
-        value, slope = _parts(t, w, h, near)
+        value, slope = parts(t)
         small = abs(value) <= 1e-15 * (w * w / t + 0.5)
         t = t - (1.0 - small) * value / (value / t + slope + small)
         if np.all(small):
             break
     return t
+
+
+def inviscid_band(share: Any, most: float, fast: float) -> tuple[Any, Any]:
+    """Ends in t of the band of the inviscid relation, with its maximum w at t given."""
+    found: tuple[Any, Any] = mapped(lambda share: _inviscid_band(share, most, fast), share)
+    return found
+
+
+def _inviscid_band(share: Any, most: float, fast: float) -> tuple[Any, Any]:
+    w = share * fast
+
+    def parts(t: Any) -> tuple[Any, Any]:
+        ratio, ratio_t = ratio_and_slope(t)
+        pull = (1.0 - t) / ratio
+        return w * w / t - pull, (1.0 + pull * ratio_t) / ratio - w * w / (t * t)
+
+    low, high = longwave_band(0.0, share)
+    low = _newton_edge(low * (most / 0.5), w, parts)
+    high = _newton_edge(1.0 - (1.0 - high) * ((1.0 - most) / 0.5), w, parts)
+    return np.minimum(low, most), np.maximum(high, most)
 
 
 def longwave_band(h: Any, share: Any) -> tuple[Any, Any]:
@@ -238,8 +263,10 @@ def _by_branch(work: Callable[..., Any], near: Any, *given: Any) -> Any:
     count = np.count_nonzero(near)
     if count == 0 or count == near.size:
         return work(*given, bool(count))
-    parts = [(mask, work(*(one[mask] for one in given), kind)) for mask, kind in
-             ((near, True), (~near, False))]
+    parts = [
+        (mask, work(*(one[mask] for one in given), kind))
+        for mask, kind in ((near, True), (~near, False))
+    ]
     several = isinstance(parts[0][1], tuple)
     results = tuple(np.empty(near.shape) for _ in (parts[0][1] if several else (0,)))
     for mask, found in parts:

@@ -10,8 +10,8 @@ from dropkit.validity import Outside, Range
 
 __all__ = ["laminar_pipe_breakup_length"]
 
-WEBER: Final = Range(8.0, 4500.0, "the Weber number of the liquid on the diameter", "")
-OHNESORGE: Final = Range(0.004, 0.085, "the Ohnesorge number on the diameter", "")
+WEBER: Final = Range(7.0, 5060.0, "the Weber number of the liquid on the diameter", "")
+OHNESORGE: Final = Range(0.004, 0.64, "the Ohnesorge number on the diameter", "")
 
 MODEL: Final = Published(
     gives="breakup length of a laminar jet from a long tube, without drive",
@@ -21,9 +21,9 @@ MODEL: Final = Published(
     mark="S2",
     place="L/d = 19.5 [We^0.5 (1 + 3 Oh)]^0.85",
     ranges=(WEBER, OHNESORGE),
-    agreement="Grant 1965, 7 Rayleigh rows held here: bias -5 %, rms of ln(L) 0.094 (32 rows of his "
-    "tables: +0.9 %, 0.108); other laboratories: Arai 0 %, Sterling +15 %, Phinney -33 %, "
-    "Asset & Bales -32 %, Mansour -39 % of the formula",
+    agreement="measured over formula, mean ratio and rms of ln: Grant 1965, 36 rows, 1.00, 0.103 "
+    "(his single tables 0.87 to 1.18); other laboratories: Arai 1.00, 0.10; Sterling 1.15, 0.23; "
+    "Asset & Bales 0.68, 0.46; Phinney 0.67, 0.44; Mansour 0.61, 0.74",
 )
 
 
@@ -56,7 +56,8 @@ def laminar_pipe_breakup_length(
     jet_diameter : float or array
         Diameter of the jet [m].
     outside : {"raise", "warn", "nan", "allow"}, keyword-only
-        What happens outside Weber numbers of 8 to 4500 and Ohnesorge numbers of 0.004 to 0.085.
+        What happens outside Weber numbers of 7 to 5060 and Ohnesorge numbers of 0.004 to 0.64
+        (of which 0.085 to 0.63 is a gap between the rows).
 
     Returns
     -------
@@ -77,8 +78,8 @@ def laminar_pipe_breakup_length(
     is too long by half or more against Grant's own tables. Grant's tables, as they were
     transcribed, give one diameter and do not tell jet from tube.
 
-    The turbulent line of the same paper, ``8.51 We^0.32``, belongs to another mechanism and is
-    not part of this model.
+    The turbulent line of the same paper belongs to another mechanism:
+    `turbulent_pipe_breakup_length`.
 
     References
     ----------

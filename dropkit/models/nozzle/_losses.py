@@ -18,10 +18,15 @@ LAMINAR: Final = Range(0.0, 2100.0, "the Reynolds number of the hole", "")
 
 PARTS: Final = ("gauge_pressure", "pressure", "pressure", "pressure", "pressure")
 
+# Rounding in a ratio of lengths must not put the end of a range outside it.
+ROUNDING: Final = 1e-6
+
 # Half of Sampson's exact resistance of a thin plate, 3 mu Q/a^3 for both sides: a jet in gas has
 # viscous liquid on one side only. In terms of mean speed and diameter: 3 pi mu U/d [C].
 ENTRY: Final = 3.0 * math.pi
 POISEUILLE: Final = 32.0
+
+_STEP: Final = 1e-15  # where Newton ends: the noise of a logarithm
 
 
 class NozzlePressure(NamedTuple):
@@ -94,7 +99,7 @@ def quadratic_velocity(inertial: Any, linear: Any, pressure: Any) -> Any:
 
 
 def increasing_root(function: Callable[[Any], tuple[Any, Any]], start: Any) -> Any:
-    """Where an increasing function is zero: Newton, kept inside a bracket, all elements at once.
+    """Where an increasing function is zero: Newton inside a bracket, all elements at once.
 
     Parameters
     ----------
@@ -108,7 +113,11 @@ def increasing_root(function: Callable[[Any], tuple[Any, Any]], start: Any) -> A
     float or array
         The root; NaN where the function is.
     """
-    y: Any = np.asarray(start, dtype=np.float64)
+    # What the function brings along may be an array where the start is none.
+    first = function(start)[0]
+    if not isinstance(first, np.ndarray):
+        return _single_root(function, float(start))
+    y: Any = np.broadcast_to(start, first.shape)
     with np.errstate(all="ignore"):
         low, high = y - 60.0, y + 60.0
         for _ in range(100):
@@ -119,20 +128,42 @@ def increasing_root(function: Callable[[Any], tuple[Any, Any]], start: Any) -> A
             inside = (following >= low) & (following <= high)
             following = np.where(inside, following, 0.5 * (low + high))
             # A NaN is no step: it stays what it is.
-            moved = np.abs(following - y) > 1e-15 * np.maximum(1.0, np.abs(y))
+            moved = np.abs(following - y) > _STEP * np.maximum(1.0, np.abs(y))
             y = np.where(np.isfinite(value), following, np.nan)
             if not moved.any():
                 break
-    return y if y.ndim else float(y)
+    return y
+
+
+def _single_root(function: Callable[[Any], tuple[Any, Any]], y: float) -> float:
+    """`increasing_root` of one element: the same steps without what arrays cost."""
+    low, high = y - 60.0, y + 60.0
+    for _ in range(100):
+        value, slope = function(y)
+        if not math.isfinite(value):
+            return math.nan
+        low, high = (y if value < 0.0 else low), (y if value > 0.0 else high)
+        following = y - value / slope
+        if not low <= following <= high:
+            following = 0.5 * (low + high)
+        moved = abs(following - y) > _STEP * max(1.0, abs(y))
+        y = following
+        if not moved:
+            break
+    return y
 
 
 def logarithm(value: Any) -> Any:
-    """Natural logarithm of floats and arrays alike; -inf or NaN where there is none."""
-    with np.errstate(all="ignore"):
-        return np.log(value) if isinstance(value, np.ndarray) else float(np.log(value))
+    """Natural logarithm of floats and arrays alike; NaN where there is none."""
+    if isinstance(value, np.ndarray):
+        with np.errstate(all="ignore"):
+            return np.log(value)
+    return math.log(value) if 0.0 < value < math.inf else math.nan
 
 
 def exponential(value: Any) -> Any:
     """Inverse of `logarithm`."""
-    with np.errstate(all="ignore"):
-        return np.exp(value) if isinstance(value, np.ndarray) else float(np.exp(value))
+    if isinstance(value, np.ndarray):
+        with np.errstate(all="ignore"):
+            return np.exp(value)
+    return math.exp(value) if value < 700.0 else math.inf if value >= 700.0 else math.nan

@@ -1,4 +1,4 @@
-"""Breakup lengths against closed values and against measured lengths of six studies.
+"""Natural breakup lengths against closed values and measured lengths of six studies.
 
 Marks: [C] computed elsewhere from the closed formula; [S2] measured, as someone else transcribed it.
 Statistics of the whole set stand in docs/jets.md; they are asserted here, so that the page stays true.
@@ -6,16 +6,14 @@ Statistics of the whole set stand in docs/jets.md; they are asserted here, so th
 
 from __future__ import annotations
 
-import csv
 import math
 
 import numpy as np
 import pytest
-from hypothesis import given
-from hypothesis import strategies as st
 
-from dropkit.errors import DropkitWarning, OutOfRange, Unphysical
+from dropkit.errors import OutOfRange
 from dropkit.models import jet
+from dropkit.published_rows import published_file
 from dropkit.records import data_dir
 
 STUDIES = ("Arai1985", "AssetBales1951", "Grant1965", "Mansour1994", "Phinney1970", "Sterling1969")
@@ -23,9 +21,8 @@ STUDIES = ("Arai1985", "AssetBales1951", "Grant1965", "Mansour1994", "Phinney197
 
 def rows(study: str, regime: str = "Rayleigh") -> dict[str, np.ndarray]:
     """We, Oh (on the diameter) and L/d of one study's rows of one regime."""
-    text = (data_dir() / "published" / "jets" / f"{study}.csv").read_text(encoding="utf-8")
-    lines = [line for line in text.splitlines() if not line.startswith("#")]
-    kept = [row for row in csv.DictReader(lines) if row["regime"] == regime]
+    found = published_file(data_dir() / "published" / "jets" / f"{study}.csv")
+    kept = [row for row in found if row["regime"] == regime]
     weber = np.array([float(row["We_d"]) for row in kept])
     reynolds = np.array([float(row["Re_d"]) for row in kept])
     length = np.array([float(row["breakup_length_over_d"]) for row in kept])
@@ -55,7 +52,7 @@ def test_natural_is_webers_growth_with_a_fixed_logarithm() -> None:
     growth = jet.maximum_growth_viscous_longwave(*liquid, 75e-6)
     found = jet.natural_breakup_length(*liquid, 12.0, 75e-6)
     assert found.length == pytest.approx(12.0 * 10.0 / growth, rel=1e-13)
-    by_amplitude = jet.stimulated_breakup_length(12.0, 75e-6, growth, 37.5e-6 * math.exp(-10.0))
+    by_amplitude = jet.breakup_length_from_growth(12.0, 75e-6, growth, 37.5e-6 * math.exp(-10.0))
     assert found.length == pytest.approx(by_amplitude, rel=1e-12)
     assert found.high / found.length == pytest.approx(2.4)
     assert found.length / found.low == pytest.approx(2.4)
@@ -92,22 +89,74 @@ def test_natural_study_by_study(study: str, count: int, bias: float, rms: float)
     assert np.mean(np.abs(logs) < math.log(2.4)) >= 0.96
 
 
+def constant_without(left_out: str) -> float:
+    """ln(C/10) from five studies, each counted the same."""
+    return float(np.mean([logs.mean() for study, logs in LOGS.items() if study != left_out]))
+
+
+def test_the_band_holds_a_study_that_was_left_out() -> None:
+    """The promise: no wider than 2.5 either way, 90 % on average, 75 % of the worst study.
+
+    The constant is made from the other five each time; the width, 2.4, is the shipped one, which
+    was chosen with all six in sight (the next test says what that hides).
+    """
+    covered = {
+        study: np.mean(np.abs(LOGS[study] - constant_without(study)) < math.log(2.4))
+        for study in STUDIES
+    }
+    constants = [10.0 * math.exp(constant_without(study)) for study in STUDIES]
+    assert min(constants) > 10.1
+    assert max(constants) < 11.2
+    assert np.mean(list(covered.values())) == pytest.approx(0.980, abs=0.001)
+    worst = min(covered, key=lambda study: covered[study])
+    assert worst == "Mansour1994"
+    assert covered[worst] == pytest.approx(0.919, abs=0.001)
+    assert covered["Sterling1969"] == pytest.approx(0.96, abs=0.001)
+    assert all(covered[study] == 1.0 for study in set(STUDIES) - {worst, "Sterling1969"})
+
+
 @pytest.mark.parametrize("left_out", STUDIES)
-def test_a_study_left_out(left_out: str) -> None:
-    """Constant and band from five studies, each counted the same, against the sixth."""
+def test_the_width_of_the_band_from_five_studies(left_out: str) -> None:
+    """Their 95 % quantile is too narrow for the sixth in one case; with it as a new study, too wide.
+
+    A prediction interval (Student's t between the means of five studies, scatter within them)
+    would be 2.7 to 4.8 wide: wider than the 2.5 that was asked for.
+    """
     others = [LOGS[study] for study in STUDIES if study != left_out]
-    middle = np.mean([logs.mean() for logs in others])
-    pooled = np.concatenate(others) - middle
-    band = np.quantile(np.abs(pooled), 0.95)
-    covered = np.mean(np.abs(LOGS[left_out] - middle) < band)
-    assert 10.0 <= 10.0 * np.exp(middle) <= 11.3
+    middle = constant_without(left_out)
+    quantile = np.quantile(np.abs(np.concatenate(others) - middle), 0.95)
+    covered = np.mean(np.abs(LOGS[left_out] - middle) < quantile)
     if left_out == "Mansour1994":
         # The honest exception: nobody else's jets would have foretold these.
         assert covered == pytest.approx(0.22, abs=0.01)
-        assert np.exp(band) == pytest.approx(1.73, abs=0.01)
+        assert np.exp(quantile) == pytest.approx(1.73, abs=0.01)
     else:
         assert covered >= 0.96
-        assert 2.1 < np.exp(band) < 2.4
+        assert 2.1 < np.exp(quantile) < 2.4
+    between = np.var([logs.mean() for logs in others], ddof=1)
+    inner = np.concatenate([logs - logs.mean() for logs in others])
+    within = (inner**2).sum() / (inner.size - 5)
+    students_t = 2.776  # 97.5 %, 4 degrees of freedom
+    wide = math.exp(students_t * math.sqrt(between * (1.0 + 1.0 / 5.0) + within))
+    assert 2.7 < wide < 4.8
+    assert np.mean(np.abs(LOGS[left_out] - middle) < math.log(min(wide, 2.5))) >= 0.97
+
+
+def test_tubes_that_had_no_part_in_the_choice() -> None:
+    """29 more Rayleigh rows of Grant 1965 [S2]; those of 88 % glycerol lie beyond the range."""
+    found = rows("Grant1965_tables")
+    case = jet_with(found["weber"], found["ohnesorge"])
+    model = jet.natural_breakup_length(*case, outside="nan")
+    inside = ~np.isnan(model.length)
+    assert np.count_nonzero(inside) == 23
+    ratio = found["length"][inside] / model.length[inside]
+    assert np.exp(np.log(ratio).mean()) == pytest.approx(1.37, abs=0.01)
+    assert np.sqrt((np.log(ratio) ** 2).mean()) == pytest.approx(0.366, abs=0.001)
+    assert ratio.max() < 1.8
+    assert ratio.min() > 0.95
+    beyond = jet.natural_breakup_length(*case, outside="allow").length[~inside]
+    ratio = found["length"][~inside] / beyond
+    assert np.exp(np.log(ratio).mean()) == pytest.approx(0.96, abs=0.01)  # Oh 0.63
 
 
 def test_other_regimes_are_not_natural_rayleigh_breakup() -> None:
@@ -180,6 +229,19 @@ def test_laminar_pipe_exponent_is_on_the_whole_bracket() -> None:
     assert np.exp(np.mean(np.log(wrong / found["length"]))) > 1.49
 
 
+def test_laminar_pipe_against_all_of_grants_tables() -> None:
+    """36 Rayleigh rows of eleven tables [S2]; the promise is an rms of 0.12."""
+    both = [rows("Grant1965"), rows("Grant1965_tables")]
+    found = {key: np.concatenate([part[key] for part in both]) for key in both[0]}
+    model = jet.laminar_pipe_breakup_length(*jet_with(found["weber"], found["ohnesorge"]))
+    logs = np.log(found["length"] / model)
+    assert logs.size == 36
+    assert np.exp(logs.mean()) == pytest.approx(0.995, abs=0.001)
+    assert np.sqrt((logs**2).mean()) == pytest.approx(0.103, abs=0.001)
+    thin = found["ohnesorge"] < 0.3  # without the six of 88 % glycerol
+    assert np.sqrt((logs[thin] ** 2).mean()) == pytest.approx(0.108, abs=0.001)
+
+
 @pytest.mark.parametrize(
     ("study", "bias"),
     [
@@ -196,54 +258,3 @@ def test_laminar_pipe_against_other_laboratories(study: str, bias: float) -> Non
         *jet_with(found["weber"], found["ohnesorge"]), outside="allow"
     )
     assert np.exp(np.log(found["length"] / model).mean()) == pytest.approx(bias, abs=0.01)
-
-
-# --- stimulated -----------------------------------------------------------------------------
-@given(st.floats(0.1, 50.0), st.floats(-6, -3), st.floats(10.0, 1e6), st.floats(1e-6, 0.2))
-def test_stimulated(velocity: float, power: float, growth: float, share: float) -> None:
-    d = 10.0**power
-    length = jet.stimulated_breakup_length(velocity, d, growth, share * 0.5 * d)
-    # The wave reaches the radius just there.
-    reached = share * math.exp(growth * length / velocity)
-    assert reached == pytest.approx(1.0, rel=1e-9)
-    tenth = jet.stimulated_breakup_length(velocity, d, growth, 0.1 * share * 0.5 * d)
-    assert tenth - length == pytest.approx(velocity * math.log(10.0) / growth, rel=1e-9)
-
-
-def test_stimulated_needs_a_small_growing_wave() -> None:
-    with pytest.raises(OutOfRange, match="radius amplitude"):
-        jet.stimulated_breakup_length(10.0, 60e-6, 1e4, 10e-6)
-    with pytest.raises(Unphysical, match="growth_rate"):
-        jet.stimulated_breakup_length(10.0, 60e-6, 0.0, 1e-8)
-    many = jet.stimulated_breakup_length(10.0, 60e-6, 1e4, [1e-8, 1e-5], outside="nan")
-    assert np.isnan(many).tolist() == [False, True]
-
-
-@pytest.mark.parametrize("share", [1.0, 1.5, 40.0])
-def test_stimulated_has_no_length_where_the_wave_is_as_large_as_the_jet(share: float) -> None:
-    radius = 2.0**-15  # so that the share is exact
-    case = (10.0, 2.0 * radius, 1e4)
-    with pytest.warns(DropkitWarning, match=r"1 result\(s\)") as caught:
-        alone = jet.stimulated_breakup_length(*case, share * radius, outside="allow")
-    assert math.isnan(alone)
-    assert len(caught) == 1
-    sizes = np.array([0.5, share, math.nan]) * radius
-    with pytest.warns(DropkitWarning, match=r"1 result\(s\)") as caught:
-        many = jet.stimulated_breakup_length(*case, sizes, outside="allow")
-    assert len(caught) == 1
-    assert np.isnan(many).tolist() == [False, True, True]
-    assert many[0] == pytest.approx(10.0 * math.log(2.0) / 1e4)
-
-
-def test_measured_lengths_with_one_disturbance_level() -> None:
-    """Sterling 1969, sharp orifice, water at low speed [S2]: ln(a/eps0) = 15.2 within 15 %.
-
-    The rows with little influence of the gas (gas Weber number below 0.4): the growth rate here is
-    that of a jet in vacuum.
-    """
-    water, d = (997.0, 0.93e-3, 0.0723), 2.38e-3
-    growth = jet.maximum_growth_viscous_longwave(*water, d)
-    amplitude = 0.5 * d * math.exp(-15.2)
-    for velocity, measured in ((1.40, 113.0), (3.03, 256.0)):
-        found = jet.stimulated_breakup_length(velocity, d, growth, amplitude) / d
-        assert found == pytest.approx(measured, rel=0.15)

@@ -6,13 +6,12 @@ someone else's copy.
 
 from __future__ import annotations
 
-import csv
-
 import pytest
 from hypothesis import given
 from hypothesis import strategies as st
 
 from dropkit.models import jet
+from dropkit.published_rows import published_file
 from dropkit.records import data_dir
 
 sizes = st.floats(1e-6, 1e-2)
@@ -70,10 +69,8 @@ def test_both_ways_to_the_drop_agree(d: float, velocity: float, frequency: float
 
 def test_natural_drops_of_asset_and_bales() -> None:
     """Mean drops of four natural jets, 1951 [S2]: thin jets make Rayleigh's drops, thick ones don't."""
-    text = (data_dir() / "published" / "jets" / "AssetBales1951.csv").read_text(encoding="utf-8")
-    lines = [line for line in text.splitlines() if not line.startswith("#")]
     ratios = {}
-    for row in csv.DictReader(lines):
+    for row in published_file(data_dir() / "published" / "jets" / "AssetBales1951.csv"):
         d = float(row["jet_diameter_m"])
         wave = jet.most_unstable_wavelength_inviscid(d)
         expected = jet.drop_diameter_from_wavelength(d, wave) / d
