@@ -307,6 +307,7 @@ NOMENCLATURE: Final[dict[str, str]] = {
     "relaxation_time": "time",
     "resolution": "resolution",
     "shear_rate": "shear_rate",
+    "solvent_viscosity": "viscosity",
     "specific_charge": "specific_charge",
     "speed_of_sound": "speed_of_sound",
     "static_permittivity": "static_permittivity",

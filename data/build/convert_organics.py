@@ -89,7 +89,9 @@ def identifiers() -> dict[str, tuple[str, str]]:
     folder = Path(found.submodule_search_locations[0]) / "Identifiers"
     known: dict[str, tuple[str, str]] = {}
     for file in ("pubchem small", "example user db", "pubchem large"):
-        for line in (folder / f"chemical identifiers {file}.tsv").read_text(encoding="utf-8").splitlines():
+        for line in (
+            (folder / f"chemical identifiers {file}.tsv").read_text(encoding="utf-8").splitlines()
+        ):
             _, cas, formula, mass, _ = line.split("\t", 4)
             known.setdefault(cas, (formula, mass))
     return known
@@ -313,7 +315,9 @@ def perry() -> None:
                 lambda T, a=a, b=b, c=c, d=d, m=m: m * a / b ** (1 + (1 - T / c) ** d),
                 float(row["Tmin"]), min(float(row["Tmax"]), c - 1),
             )  # fmt: skip
-        row = table("Viscosity", "Table 2-313 Viscosity of Inorganic and Organic Liquids.tsv").get(cas)
+        row = table("Viscosity", "Table 2-313 Viscosity of Inorganic and Organic Liquids.tsv").get(
+            cas
+        )
         if row:
             a, b, c, d, e = numbers(row, ("C1", "C2", "C3", "C4", "C5"))
             rows += evaluated(
@@ -321,7 +325,9 @@ def perry() -> None:
                 lambda T, a=a, b=b, c=c, d=d, e=e: math.exp(a + b / T + c * math.log(T) + d * T**e),
                 float(row["Tmin"]), float(row["Tmax"]),
             )  # fmt: skip
-        row = table("Vapor Pressure", "Table 2-8 Vapor Pressure of Inorganic and Organic Liquids.tsv").get(cas)
+        row = table(
+            "Vapor Pressure", "Table 2-8 Vapor Pressure of Inorganic and Organic Liquids.tsv"
+        ).get(cas)
         if row:
             a, b, c, d, e = numbers(row, ("C1", "C2", "C3", "C4", "C5"))
             rows += evaluated(
@@ -329,7 +335,9 @@ def perry() -> None:
                 lambda T, a=a, b=b, c=c, d=d, e=e: math.exp(a + b / T + c * math.log(T) + d * T**e),
                 float(row["Tmin"]), float(row["Tmax"]),
             )  # fmt: skip
-        row = table("Phase Change", "Table 2-150 Heats of Vaporization of Inorganic and Organic Liquids.tsv").get(cas)
+        row = table(
+            "Phase Change", "Table 2-150 Heats of Vaporization of Inorganic and Organic Liquids.tsv"
+        ).get(cas)
         if row:
             a, b, c, d = numbers(row, ("C1", "C2", "C3", "C4"))
             Tc = float(row["Tc"])
@@ -348,7 +356,10 @@ def perry() -> None:
                 lambda T, c=c, m=m: sum(a * T**n for n, a in enumerate(c)) / (1000 * m),
                 float(row["Tmin"]), float(row["Tmax"]), 5,
             )  # fmt: skip
-        row = table("Thermal Conductivity", "Table 2-315 Thermal Conductivity of Inorganic and Organic Liquids.tsv").get(cas)
+        row = table(
+            "Thermal Conductivity",
+            "Table 2-315 Thermal Conductivity of Inorganic and Organic Liquids.tsv",
+        ).get(cas)
         if row:
             c = numbers(row, ("C1", "C2", "C3", "C4", "C5"))
             rows += evaluated(
@@ -383,7 +394,9 @@ def vdi(folder: Path) -> None:
                 ),
                 0.0, Tc - 1,
             )  # fmt: skip
-        row = table("Viscosity", "VDI PPDS Dynamic viscosity of saturated liquids polynomials.tsv").get(cas)
+        row = table(
+            "Viscosity", "VDI PPDS Dynamic viscosity of saturated liquids polynomials.tsv"
+        ).get(cas)
         if row:
             a, b, c_, d, e = numbers(row, "ABCDE")
 
@@ -416,7 +429,9 @@ def vdi(folder: Path) -> None:
                 ),
                 0.0, Tc - 1, 5,
             )  # fmt: skip
-        row = table("Vapor Pressure", "VDI PPDS Boiling temperatures at different pressures.tsv").get(cas)
+        row = table(
+            "Vapor Pressure", "VDI PPDS Boiling temperatures at different pressures.tsv"
+        ).get(cas)
         if row:
             Tc, pc = float(row["Tc"]), float(row["Pc"])
             c = numbers(row, "ABCD")
@@ -427,7 +442,9 @@ def vdi(folder: Path) -> None:
                 )),
                 0.0, Tc - 1,
             )  # fmt: skip
-        row = table("Thermal Conductivity", "VDI PPDS Thermal conductivity of saturated liquids.tsv").get(cas)
+        row = table(
+            "Thermal Conductivity", "VDI PPDS Thermal conductivity of saturated liquids.tsv"
+        ).get(cas)
         if row:
             c = numbers(row, "ABCDE")
             rows += evaluated(

@@ -87,9 +87,7 @@ def archive(folder: Path) -> None:
             prop = PROPERTIES.get(quantity)
             # No rule mixes speeds of sound or permittivities.
             if prop in ("density", "viscosity", "surface_tension", "refractive_index"):
-                rows.append(
-                    oriented(first, second, basis, fraction, row["T_K"], prop, value, doi)
-                )
+                rows.append(oriented(first, second, basis, fraction, row["T_K"], prop, value, doi))
     head = [
         "# source: journal papers, DOI (or volume and page) per row",
         "# seen: NIST/TRC ThermoML archive files, and data files of public repositories that carry",

@@ -317,9 +317,7 @@ def vapour_pressure(key: str) -> Iterator[Block]:
         name: points(name, key, "vapour_pressure")
         for name in ("McGarry1983", "PerryGreen2008", "VDIHeatAtlas2010", "Poling2001")
     }
-    seconds = {
-        name: selection(name, doi=EQUATION) for name, found in known.items() if found
-    }
+    seconds = {name: selection(name, doi=EQUATION) for name, found in known.items() if found}
     row = table("Vapor Pressure", "Wagner Original McGarry.tsv").get(cas)
     if row:
         Tc = float(row["Tc"])
@@ -557,12 +555,19 @@ def diffusivity_in_air(key: str) -> Iterator[Block]:
                     "place": "data/published/liquids/Fuller1966_organics.csv", "tolerance": 0.01}],
     }  # fmt: skip
     estimate = {
-        "grade": "estimated", "source_uncertainty": 0.08, "place": "estimate by the method",
+        "grade": "estimated",
+        "source_uncertainty": 0.08,
+        "place": "estimate by the method",
     }
     if measured:
-        yield block | estimate | {
-            "second": measured, "place": "estimate by the method, beside measured values",
-        }
+        yield (
+            block
+            | estimate
+            | {
+                "second": measured,
+                "place": "estimate by the method, beside measured values",
+            }
+        )
     yield block | estimate
 
 
@@ -659,7 +664,9 @@ def facts(key: str, flashes: dict[str, dict[str, str]]) -> Block:
     for name, column in (("melting_point", "Tm"), ("boiling_point", "Tb")):
         if row and row[column]:
             found[name] = {
-                "value": float(row[column]), "source": "CRCHandbook2014", "place": place,
+                "value": float(row[column]),
+                "source": "CRCHandbook2014",
+                "place": place,
             }
     row = table("Critical Properties", "CRCCriticalOrganics.tsv").get(cas)
     for name, column in (("critical_temperature", "Tc"), ("critical_pressure", "Pc")):

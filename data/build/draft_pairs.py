@@ -55,7 +55,9 @@ def best(pair: Pair, prop: str, names: list[str]) -> tuple[dict[str, Any] | None
     low, high = float(T.min()), float(T.max())
     spread = high - low
     temperatures = len({round(t) for t in T})
-    ends = [round(low - 2, 2), round(high + 2, 2)] if spread < 1 else [round(low, 2), round(high, 2)]
+    ends = (
+        [round(low - 2, 2), round(high + 2, 2)] if spread < 1 else [round(low, 2), round(high, 2)]
+    )
     fractions = [0.0, 1.0]
     if w.min() > 0.3:
         fractions[0] = float(f"{w.min():.3f}") - 0.001

@@ -36,7 +36,7 @@ TITLES = {
     "propellant": "Propellants", "salt": "Salts (in water)", "siloxane": "Siloxanes",
     "sulfone": "Sulfones", "sulfoxide": "Sulfoxides", "terpene": "Terpenes", "water": "Water",
 }  # fmt: skip
-UNITS = {name: display.unit_of(name, with_units=False) or "1" for name in PROPERTIES}
+UNITS = {name: display.unit_of(name) for name in PROPERTIES}
 
 
 def title(family: str) -> str:
@@ -80,8 +80,7 @@ def second(block: PropertyRecord) -> str:
     if block.second is not None:
         s = block.second
         return (
-            f"{100 * s['median']:.2g} / {100 * s['worst']:.2g} "
-            f"({s['points']:.0f} of {s['source']})"
+            f"{100 * s['median']:.2g} / {100 * s['worst']:.2g} ({s['points']:.0f} of {s['source']})"
         )
     if block.left_out is not None:
         entry = block.left_out

@@ -20,6 +20,7 @@ from typing import NamedTuple
 import numpy as np
 import pint
 from bench_cases import HIGH, LOW, SIX, STRINGS, TEMPERATURES, fractions, temperatures
+from bench_growth import newton, points, scalar_roots
 from bench_liquids import ASKED, FIRST_CHOICES, made_up_folder
 from bench_rivals import ENGINES, bare, bare_viscosity_of_pair, tabulated_water_viscosity
 from bench_timing import PINT, duel, per_call, start_costs
@@ -141,6 +142,25 @@ def finding() -> Iterator[Row]:
             records._STORE = own
 
 
+def growth() -> Iterator[Row]:
+    """A million growth rates of the full viscous relation, and scipy point by point on a part."""
+    grow = dk.models.jet.reduced_growth_viscous_full
+    x, oh = points(MILLION)
+    d = duel(lambda: grow(x, oh), lambda: newton(x, oh), 5)
+    note = f"plain vectorised Newton {d.rival / MILLION * 1e6:.2f} us each"
+    yield Row("1e6 growth rates, full relation, each", d.ours / MILLION * 1e6, 1, "us", note)
+    part = 500
+    each = duel(lambda: None, lambda: scalar_roots(x[:part], oh[:part]), 5).rival / part
+    yield Row(
+        "1e6 growth rates, times faster than a scalar root finder",
+        each / (d.ours / MILLION),
+        100,
+        "x",
+        f"scipy brentq {each * 1e6:.0f} us each on {part} of the points",
+        more_is_better=True,
+    )
+
+
 def engines(tables: bool) -> Iterator[Row]:
     """Per element, against the array paths of the engines."""
     T, large = temperatures(10_000), temperatures(MILLION)
@@ -182,7 +202,14 @@ def main() -> None:
     )
     print(f"load before: {os.getloadavg()[0]:.1f}\n" if hasattr(os, "getloadavg") else "")
     print(f"{'what':<58}{'measured':>14}{'promised':>9}           beside")
-    for part in (starts(), finding(), scalars(), arrays(), engines("--tables" in sys.argv)):
+    for part in (
+        starts(),
+        finding(),
+        scalars(),
+        arrays(),
+        growth(),
+        engines("--tables" in sys.argv),
+    ):
         for row in part:
             print(row.text(), flush=True)
 

@@ -71,6 +71,12 @@ CASE = {
     "distance": 0.1,
     "count": 2.0,
     "merged_diameter": 3e-4,
+    "reduced_wavenumber": 0.6,
+    "ohnesorge_radius": 0.1,
+    "share": 0.8,
+    "solvent_viscosity": 1e-3,
+    "relaxation_time": 1e-3,
+    "radius": 50e-6,
 }
 
 

@@ -225,7 +225,9 @@ def test_bad_input() -> None:
         numbers.NumbersSheet.from_dict({"kind": "State"})
 
 
-@pytest.mark.parametrize("gas", ["air", 1.2, dk.air, np.array([1.2])], ids=["text", "number", "function", "array"])
+@pytest.mark.parametrize(
+    "gas", ["air", 1.2, dk.air, np.array([1.2])], ids=["text", "number", "function", "array"]
+)
 def test_a_gas_that_holds_no_properties_is_refused(gas: Any) -> None:
     with pytest.raises(BadInput, match=r"gas = .* has no density.*dk\.air\(\"25 degC\"\)"):
         dk.liquid("water").at("20 degC").numbers("60 um", "10 m/s", gas=gas)

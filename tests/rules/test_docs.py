@@ -159,7 +159,7 @@ def commands(ending: str) -> list[str]:
 
 
 def test_the_readme_has_two_commands_that_set_up_everything() -> None:
-    for ending in (r" -m pytest", r" examples/[a-z_]*\.py"):
+    for ending in (r" -m pytest -n auto", r" examples/[a-z_]*\.py"):
         (command,) = commands(ending)
         assert command.startswith(
             "python3 -m venv .venv && .venv/bin/pip install -q -e '.[plots,test]' && "
@@ -197,7 +197,7 @@ def test_ci_runs_the_readmes_test_command() -> None:
     code = [line for line in script.splitlines() if not line.lstrip().startswith("#")]
     # The command is taken from the README; nothing else in the script starts the tests.
     assert [line for line in code if "pytest" in line] == [
-        "test_command=$(readme_line ' -m pytest')"
+        "test_command=$(readme_line ' -m pytest -n auto')"
     ]
-    (command,) = commands(" -m pytest")
+    (command,) = commands(" -m pytest -n auto")
     assert os.environ.get("DROPKIT_TEST_COMMAND", command) == command

@@ -48,6 +48,11 @@ every_function = pytest.mark.parametrize("function", FUNCTIONS.values(), ids=FUN
 # through air, by the word of the argument and, for words not here, by its kind. A new function
 # that these do not suit adds its word here.
 BY_WORD = {
+    "holes": 3.0,
+    "contraction": 0.9,
+    "entry_loss": 1.0,
+    "discharge_coefficient": 0.7,
+    "flow_index": 1.0,
     "gas_density": 1.2,
     "wavelength": 5e-4,
     "drop_diameter": 2e-4,
@@ -79,8 +84,13 @@ BY_WORD = {
     "pressure_amplitude": 1e3,
     "kinetic_factor": 1.5,
     "count": 2.0,
+    "reduced_wavenumber": 0.6,
+    "ohnesorge_radius": 0.1,
+    "share": 0.8,
+    "solvent_viscosity": 1e-3,
 }
 BY_KIND = {
+    "temperature": 298.15,
     "density": 1000.0,
     "viscosity": 5e-3,
     "gas_viscosity": 1.8e-5,
@@ -560,7 +570,8 @@ def kinds_without_a_sample() -> Iterator[str]:
     """Words whose sample is the last resort, 1."""
     for name, function in FUNCTIONS.items():
         for word, kind in function.kinds.items():
-            if word not in BY_WORD and kind not in BY_KIND:
+            own = BY_FUNCTION.get(function.__name__, {})
+            if word not in own and word not in BY_WORD and kind not in BY_KIND:
                 yield f"{name}: {word} ({kind})"
 
 

@@ -45,3 +45,11 @@ def test_every_liquid_has_its_picture_and_no_other_has() -> None:
         if any(isinstance(row[name], str) for name in LEADING)
     }
     assert {path.stem for path in (FOLDER / "pictures").glob("*.png")} == wanted
+
+
+def test_values_stand_beside_their_unit() -> None:
+    # water at 20 degC: 1.0016 mPa*s (IAPWS R12-08), 998.2 kg/m3, 72.7 mN/m (IAPWS R1-76)
+    page = PAGES["water.md"]
+    assert "| viscosity [mPa*s] | 1.00" in page
+    assert "| density [kg/m3] | 998." in page
+    assert "| surface tension [mN/m] | 72.7" in page

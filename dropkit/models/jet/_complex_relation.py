@@ -11,21 +11,29 @@ from typing import Any, Final
 
 import numpy as np
 
+from dropkit.models.jet._roots import between
 from dropkit.models.jet._viscous_relation import COMPLEX_COEFFICIENTS
 
 __all__: list[str] = []
+
+# Where the inviscid jet turns from convectively to absolutely unstable: the inflection of
+# sqrt((x^2 - 1) x I1(x)/I0(x)) and the slope there, computed to 30 digits [C].
+X_CRITICAL: Final = 1.281085480192699
+V_CRITICAL: Final = 1.767073931827163
 
 # Series where both arguments lie well inside the circle of |t| = 14.68.
 _INSIDE: Final = 2.6
 _CLOSE: Final = 1.0
 # Speeds from which a spatial wave is followed, stages of the speed, steps in each.
 _FAST: Final = 6.0
-_STAGES: Final = 12
+_STAGES: Final = 4
 _FINE_STAGES: Final = 300
-_NEWTON: Final = 6
+_NEWTON: Final = 3
+_LAST: Final = 8
 # Relative last step that ends a search, and the one that passes as found.
 _ROUNDING: Final = 1e-15
 _FOUND: Final = 1e-9
+_CLOSE_TO_TURN: Final = 0.9
 _DECAY_STEPS: Final = 60
 _SHORTEST: Final = 5.0
 
@@ -119,6 +127,8 @@ def spatial_wave(omega: Any, h: Any, v: Any) -> Any:
 
 def _followed(omega: Any, h: Any, v: Any, stages: int) -> Any:
     start = np.maximum(v, _FAST)
+    if not (v < _FAST).any():
+        stages = 1
     x = omega - 1j * _temporal_start(omega, h) / start
     before = start
     change = np.zeros_like(x)
@@ -126,8 +136,8 @@ def _followed(omega: Any, h: Any, v: Any, stages: int) -> Any:
         now = v * (start / v) ** (1.0 - stage / stages)
         x = omega + (x - omega) * (before / now)
         before = now
-        x, change = _newton_spatial(x, omega, h, now, _NEWTON)
-    return np.where(np.abs(change) <= _FOUND * np.abs(x), x, np.nan)
+        x, change = _newton_spatial(x, omega, h, now, _NEWTON if stage < stages else _LAST)
+    return np.where(np.abs(change) <= _FOUND * np.abs(x), x, complex(np.nan, np.nan))
 
 
 def _newton_spatial(x: Any, omega: Any, h: Any, v: Any, steps: int) -> tuple[Any, Any]:
@@ -160,8 +170,8 @@ def decay(x: Any, h: Any) -> Any:
         return np.where(np.abs(f) <= _FOUND * np.abs(f_w * w), w.real, np.nan)
 
 
-def inviscid_turning_point(v: Any) -> tuple[Any, Any, Any]:
-    """Where two waves of an inviscid jet become one: real x, omega there, and half the curvature.
+def inviscid_turning_point(v: Any) -> tuple[Any, Any]:
+    """Where two waves of an inviscid jet become one: the real x, and omega there.
 
     Above that omega, which is a little below 1, no wave grows along the jet.
     """
@@ -175,22 +185,24 @@ def inviscid_turning_point(v: Any) -> tuple[Any, Any, Any]:
 
     x = between(slope, np.ones_like(v), np.full_like(v, X_CRITICAL))
     t = x * x
-    ratio, ratio_t = _ratio(t + 0j)
-    square = ((t - 1.0) * t / ratio).real
-    return x, x - np.sqrt(square) / v, square
+    square = (t - 1.0) * t / _ratio(t + 0j)[0].real
+    return x, x - np.sqrt(square) / v
 
 
 def inviscid_spatial_wave(omega: Any, v: Any) -> Any:
     """As `spatial_wave`, without viscosity, for frequencies up to the turning point."""
     none = np.zeros_like(omega)
     x = spatial_wave(omega, none, v)
-    turn, last, _ = inviscid_turning_point(v)
+    turn, last = inviscid_turning_point(v)
     close = omega > _CLOSE_TO_TURN * last
     if close.any():
         near, there, speed = turn[close], last[close], v[close]
         step = 1e-4 * near
-        curvature = (_mismatch(near + step, there, speed) - 2.0 * _mismatch(near, there, speed)
-                     + _mismatch(near - step, there, speed)) / (step * step)
+        curvature = (
+            _mismatch(near + step, there, speed)
+            - 2.0 * _mismatch(near, there, speed)
+            + _mismatch(near - step, there, speed)
+        ) / (step * step)
         push = 2.0 * speed * speed * (near - there) * (omega[close] - there)
         start = near - 1j * np.sqrt(np.maximum(2.0 * push / curvature, 0.0))
         found, _ = _newton_spatial(start, omega[close], none[close], speed, _DECAY_STEPS)

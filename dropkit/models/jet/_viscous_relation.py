@@ -177,7 +177,8 @@ def _fastest(h: Any) -> tuple[Any, Any]:
     start = z * later - last + _START[-1]
     t = start / (2.0 + 3.0 * 2.0**0.5 * h)
     near = 1.0 / (8.0**0.5 + 6.0 * h) <= h
-    return _by_branch(_climb, near, t, h)
+    found: tuple[Any, Any] = _by_branch(_climb, near, t, h)
+    return found
 
 
 def _climb(t: Any, h: Any, near: bool) -> tuple[Any, Any]:

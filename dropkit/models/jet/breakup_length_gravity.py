@@ -167,11 +167,13 @@ def gravity_thinned_breakup_length(
         start = np.nan if wavelength is None else np.pi * jet_diameter / wavelength
         given = np.broadcast_arrays(ohnesorge, pull, constant, start)
         flat = [np.asarray(part, dtype=np.float64).ravel() for part in given]
-        time, wave = np.empty_like(flat[0]), np.empty_like(flat[0])
-        for first in range(0, time.size, _CHUNK):
+        times, waves = np.empty_like(flat[0]), np.empty_like(flat[0])
+        for first in range(0, times.size, _CHUNK):
             part = slice(first, first + _CHUNK)
-            time[part], wave[part] = _solve(*(one[part] for one in flat), wavelength is not None)
-        time, wave = time.reshape(given[0].shape), wave.reshape(given[0].shape)
+            h, g, c, k = (one[part] for one in flat)
+            times[part], waves[part] = _solve(h, g, c, k, wavelength is not None)
+        shape = given[0].shape
+        time, wave = times.reshape(shape), waves.reshape(shape)
         length = velocity * clock * time * (1.0 + 0.5 * pull * time)
         results = (
             length,

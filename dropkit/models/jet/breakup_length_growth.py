@@ -13,7 +13,7 @@ from dropkit.validity import Outside, Range
 
 __all__ = ["breakup_length_from_growth", "radius_amplitude_from_breakup_length"]
 
-LINEAR: Final = Range(0.0, 0.2, "the radius amplitude over the jet radius", "")
+LINEAR: Final = Range(0.0, 0.2 * (1.0 + 1e-12), "the radius amplitude over the jet radius", "")
 
 MODEL: Final = Published(
     gives="breakup length from any growth rate and an initial amplitude of the radius, and back",

@@ -16,7 +16,7 @@ from dropkit.validity import Outside, Range
 
 __all__ = ["StimulatedBreakup", "stimulated_breakup_length"]
 
-LINEAR: Final = Range(0.0, 0.2, "the radius amplitude over the jet radius", "")
+LINEAR: Final = Range(0.0, 0.2 * (1.0 + 1e-12), "the radius amplitude over the jet radius", "")
 _ROUNDING: Final = 1e-12
 GROWING: Final = Range(0.0, 1.0 + _ROUNDING, "the reduced wavenumber pi d / wavelength", "")
 # Newton's steps for the time; most cases need two, amplitudes near the radius itself eleven.
@@ -202,8 +202,9 @@ def stimulated_breakup_length(
                 kinetic_factor=1.0 if kinetic_factor is None else kinetic_factor,
             )
             speed = inside * narrowing
-        if speed is None:
-            ratio: Any = radius_amplitude / radius
+        ratio: Any
+        if radius_amplitude is not None:
+            ratio = radius_amplitude / radius
             time = np.where(ratio < 1.0, -np.log(ratio), np.nan) / growing
         else:
             ratio = math.pi * speed / (wavelength * (growing + decaying))

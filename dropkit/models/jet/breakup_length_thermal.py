@@ -13,7 +13,7 @@ from dropkit.validity import Outside, Range
 
 __all__ = ["thermal_breakup_length"]
 
-WEBER: Final = Range(2.0, 4500.0, "the Weber number of the liquid on the jet diameter", "")
+WEBER: Final = Range(2.0, 5060.0, "the Weber number of the liquid on the jet diameter", "")
 OHNESORGE: Final = Range(0.0, 0.64, "the Ohnesorge number on the jet diameter", "")
 _BOLTZMANN: Final = 1.380649e-23  # J/K, exact by definition of the kelvin
 
@@ -25,7 +25,7 @@ MODEL: Final = Published(
     place="L = U ln(a/eps0)/w, eps0 = (k_B T/gamma)^(1/2)",
     ranges=(WEBER, OHNESORGE),
     agreement="measured over formula, mean ratio, 178 Rayleigh rows: Sterling 1969, sharp orifice, "
-    "0.97; Arai 1985 1.08; Grant 1965, thin liquids 1.13 to 1.24, viscous 0.67 to 0.79; Phinney "
+    "0.97; Arai 1985 1.08; Grant 1965, thin liquids 1.15, viscous 0.67 to 0.78; Phinney "
     "1970 0.55 to 0.58, and 1.26 from one tube; Mansour 1994 0.33 and 0.64; all 0.71, rms of "
     "ln 0.56",
 )
@@ -62,7 +62,7 @@ def thermal_breakup_length(
     jet_diameter : float or array
         Diameter of the jet [m].
     outside : {"raise", "warn", "nan", "allow"}, keyword-only
-        What happens outside Weber numbers of 2 to 4500 and Ohnesorge numbers up to 0.64.
+        What happens outside Weber numbers of 2 to 5060 and Ohnesorge numbers up to 0.64.
 
     Returns
     -------

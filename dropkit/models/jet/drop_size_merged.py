@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from typing import Final
+from typing import Any, Final
 
 from dropkit.boundary import physical
 from dropkit.models.published import Published
@@ -54,7 +54,9 @@ def merged_drop_diameter(drop_diameter: float, count: float) -> float:
     >>> print(f"{jet.merged_drop_diameter('110 um', 2):.1f}")
     138.6 micrometer
     """
-    return drop_diameter * count ** (1.0 / 3.0)
+    growth: Any = count ** (1.0 / 3.0)
+    result: float = drop_diameter * growth
+    return result
 
 
 @physical(returns="ratio", merged_diameter="length > 0")

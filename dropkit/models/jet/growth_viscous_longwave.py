@@ -6,10 +6,13 @@ import math
 from typing import Any, Final
 
 from dropkit.boundary import physical
+from dropkit.models.jet._viscous_relation import longwave_band
+from dropkit.models.jet.growth_inviscid import GrowthBand
 from dropkit.models.published import Published, blank_outside, outside_mask
 from dropkit.validity import Outside, Range
 
 __all__ = [
+    "growth_band_viscous_longwave",
     "growth_rate_viscous_longwave",
     "maximum_growth_viscous_longwave",
     "most_unstable_wavelength_viscous_longwave",
@@ -20,7 +23,7 @@ _ROUNDING: Final = 1e-12
 GROWING: Final = Range(0.0, 1.0 + _ROUNDING, "the reduced wavenumber pi d / wavelength", "")
 
 MODEL: Final = Published(
-    gives="growth rate of a wave and the most unstable wave, with viscosity, in closed form",
+    gives="growth rate of a wave and the most unstable wave and its band, with viscosity, in closed form",
     holds="Newtonian liquid, gas Weber number far below 1, uniform velocity, small long waves",
     sources=("Weber1931",),
     mark="C",
@@ -204,3 +207,62 @@ def maximum_growth_viscous_longwave(
     scale: Any = surface_tension / (density * jet_diameter**3)
     result: float = scale**0.5 / (1.0 + 3.0 * ohnesorge)
     return result
+
+
+@physical(returns=("length", "length"), share="fraction")
+def growth_band_viscous_longwave(
+    density: float,
+    viscosity: float,
+    surface_tension: float,
+    jet_diameter: float,
+    *,
+    share: float = 0.8,
+) -> GrowthBand:
+    """Wavelengths that grow at a share of the fastest growth or more, long-wave closed form.
+
+    Holds for Newtonian liquids of any viscosity in still gas.
+
+    Parameters
+    ----------
+    density : float or array
+        Density of the liquid [kg/m3].
+    viscosity : float or array
+        Dynamic viscosity [Pa*s].
+    surface_tension : float or array
+        Surface tension [N/m].
+    jet_diameter : float or array
+        Diameter of the jet, not of the nozzle [m].
+    share : float or array, keyword-only
+        Growth rate at the ends over its maximum [-]; 0.8 by default.
+
+    Returns
+    -------
+    GrowthBand
+        ``shortest`` and ``longest`` wavelength [m].
+
+    Raises
+    ------
+    UnitError, Unphysical
+        An argument of another dimension, or outside its domain.
+
+    Notes
+    -----
+    With ``A = 2 sqrt(2) + 6 Oh_a`` and ``B = A - 6 Oh_a share`` the ends are at
+    ``x^2 = [B +- sqrt((1 - share) A (B + 2 sqrt(2) share))] / (2 A)`` [C], exact for this equation.
+    A share of 0 has no longest wavelength: NaN, with one warning.
+
+    References
+    ----------
+    C. Weber, Z. Angew. Math. Mech. 11 (1931) 136-154, doi:10.1002/zamm.19310110207.
+
+    Examples
+    --------
+    >>> from dropkit.models import jet
+    >>> band = jet.growth_band_viscous_longwave("1100 kg/m3", "10 mPa*s", "65 mN/m", "60 um")
+    >>> print(f"{band.shortest:.0f} to {band.longest:.0f}")
+    238 micrometer to 545 micrometer
+    """
+    radius = 0.5 * jet_diameter
+    ohnesorge: Any = viscosity / (density * surface_tension * radius) ** 0.5
+    low, high = longwave_band(ohnesorge, share)
+    return GrowthBand(math.pi * jet_diameter / high**0.5, math.pi * jet_diameter / low**0.5)

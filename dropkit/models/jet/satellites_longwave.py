@@ -134,7 +134,7 @@ def satellite_volume_share(
     >>> print(f"{jet.satellite_volume_share(*ink, 280e-6, 1e-6):.3f}")
     0.021
     >>> print(f"{jet.satellite_volume_share(*ink, 400e-6, 1e-6):.3f}")
-    0.100
+    0.098
     """
     x: Any = math.pi * jet_diameter / wavelength
     radius: Any = 0.5 * jet_diameter

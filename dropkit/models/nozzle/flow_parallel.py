@@ -17,7 +17,7 @@ from dropkit.models.nozzle.pressure_thin_edge import flow_thin_plate
 from dropkit.models.published import Published
 from dropkit.validity import Outside
 
-__all__ = ["HoleKind", "ParallelFlow", "parallel_flow"]
+__all__ = ["ParallelFlow", "parallel_flow"]
 
 HoleKind: TypeAlias = Literal[
     "laminar tube", "developing tube", "turbulent tube", "long orifice", "thin plate"
