@@ -53,3 +53,10 @@ def test_values_stand_beside_their_unit() -> None:
     assert "| viscosity [mPa*s] | 1.00" in page
     assert "| density [kg/m3] | 998." in page
     assert "| surface tension [mN/m] | 72.7" in page
+
+
+def test_the_readme_counts_what_there_is() -> None:
+    readme = (FOLDER.parents[1] / "README.md").read_text(encoding="utf-8")
+    kinds = dk.liquids()["kind"].value_counts()
+    assert f"It knows {kinds['liquid']} liquids" in readme
+    assert f"and {kinds['solute']} salts," in readme
