@@ -263,7 +263,7 @@ def main() -> None:
     write("CRCHandbook2021_organics", [
         "source: CRC Handbook of Chemistry and Physics, 102nd edition (J. Rumble, ed., 2021),"
         " Concentrative properties of aqueous solutions",
-        "seen: a transcription of the table in one public repository; the handbook was not seen",
+        "seen: a copy of the table in one public repository; the handbook was not seen",
         "uncertainty: not stated; my estimate: density 0.05 %, viscosity 1 %, index 0.0002",
         "note: 20 degC; about one row in three; g/cm3 times 1000, mPa*s over 1000",
         "note: not taken, out of line: viscosity of formic acid at 3 % (1.195 mPa*s)",

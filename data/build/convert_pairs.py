@@ -13,6 +13,7 @@ import sys
 from collections.abc import Iterable, Mapping, Sequence
 from decimal import Decimal
 from pathlib import Path
+from typing import TypedDict
 
 from compact_points import compact
 from convert_organics import KEYS, PUBLISHED, QUANTITIES, reference
@@ -34,6 +35,14 @@ DONE = {("dimethyl_sulfoxide", "water"), ("ethanol", "water"), ("glycerol", "wat
 
 
 NO_DOIS: Mapping[str, str] = {}
+
+
+class Options(TypedDict, total=False):
+    """What a table needs said beside its columns."""
+
+    of_second: bool
+    skip: Sequence[str]
+    dois: Mapping[str, str]
 
 
 def oriented(
@@ -127,7 +136,7 @@ def single(
 
 
 # name, source, first, second, column[, options]: column is the first component's fraction
-TABLES: tuple[tuple[str, str, str, str, str, dict[str, object]], ...] = (
+TABLES: tuple[tuple[str, str, str, str, str, Options], ...] = (
     ("acetone_water_density", "ThermoMLArchive_aqueous", "acetone", "water",
      "mole_fraction_acetone", {}),
     ("acetonitrile_water_298K_ansari_2022", "Ansari2022", "acetonitrile", "water",
@@ -175,7 +184,7 @@ def main(folder: Path) -> None:
     archive(folder)
     files: dict[str, tuple[list[str], list[list[str]]]] = {}
     for name, source, first, second, column, options in TABLES:
-        _, head, rows = single(folder, name, source, first, second, column, **options)  # type: ignore[arg-type]  # options by name
+        _, head, rows = single(folder, name, source, first, second, column, **options)
         heads, found = files.setdefault(source, ([], []))
         heads += head
         found += rows

@@ -2,16 +2,18 @@
 
 from __future__ import annotations
 
+from abc import ABC, abstractmethod
 from typing import Any
 
 __all__ = ["StreamAttributes"]
 
 
-class StreamAttributes:
+class StreamAttributes(ABC):
     """Every quantity of a stream as an attribute."""
 
+    @abstractmethod
     def _quantity(self, word: str) -> Any:
-        raise NotImplementedError
+        """A quantity, in the way the stream was asked for."""
 
     @property
     def drop_diameter(self) -> Any:

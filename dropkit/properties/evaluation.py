@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from abc import abstractmethod
 from collections.abc import Callable, Sequence
 from dataclasses import replace
 from typing import Any
@@ -31,6 +32,7 @@ class Evaluation(PropertyMethods):
         self._looked: set[str] = set()
 
     # ------------------------------------------------ what a kind of fluid must say
+    @abstractmethod
     def available(self) -> tuple[str, ...]:
         """Names of the properties that this fluid has.
 
@@ -39,34 +41,33 @@ class Evaluation(PropertyMethods):
         tuple of str
             In the order of tables.
         """
-        raise NotImplementedError
 
     @property
+    @abstractmethod
     def cautions(self) -> tuple[str, ...]:
         """What a user should know whatever property is asked."""
-        raise NotImplementedError
 
+    @abstractmethod
     def _record_range(self, prop: str) -> Range:
         """Stated temperature range of a property."""
-        raise NotImplementedError
 
+    @abstractmethod
     def _record_scalar(self, prop: str) -> Callable[[float], float] | None:
         """The quick evaluator for one temperature, or None where the composition is an array."""
-        raise NotImplementedError
 
+    @abstractmethod
     def _record_fill(
         self, prop: str, part: slice, temperature: FloatArray, out: FloatArray
     ) -> None:
         """Evaluate a flat chunk; `part` says which elements of the broadcast it covers."""
-        raise NotImplementedError
 
+    @abstractmethod
     def _record_trail(self, prop: str, temperature: float | FloatArray | None) -> Trail:
         """How the property is made inside its range."""
-        raise NotImplementedError
 
+    @abstractmethod
     def _record_blocks(self, prop: str) -> Sequence[PropertyRecord]:
         """The records that a property rests on, at whatever temperature."""
-        raise NotImplementedError
 
     def _record_settle(self, prop: str, temperature: Any, outside: str) -> Any:
         """Apply the range policy to the composition; the mask that becomes NaN."""
@@ -136,9 +137,9 @@ class Evaluation(PropertyMethods):
         """Shape of the composition; () for one composition."""
         return ()
 
+    @abstractmethod
     def _broadcast(self, shape: tuple[int, ...]) -> Evaluation:
         """The same fluid with its composition broadcast to `shape` and made flat."""
-        raise NotImplementedError
 
     def _missing(self, prop: str) -> MissingProperty:
         has = self.available()

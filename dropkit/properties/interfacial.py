@@ -332,6 +332,10 @@ class _Interface(Evaluation):
     def available(self) -> tuple[str, ...]:
         return (INTERFACIAL,)
 
+    @property
+    def cautions(self) -> tuple[str, ...]:
+        return self._record_trail(INTERFACIAL, None).cautions
+
     def _broadcast(self, shape: tuple[int, ...]) -> _Interface:
         return self
 

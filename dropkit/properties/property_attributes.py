@@ -2,16 +2,18 @@
 
 from __future__ import annotations
 
+from abc import ABC, abstractmethod
 from typing import Any
 
 __all__ = ["PropertyAttributes"]
 
 
-class PropertyAttributes:
+class PropertyAttributes(ABC):
     """Every property of a liquid as an attribute."""
 
+    @abstractmethod
     def _property(self, prop: str) -> Any:
-        raise NotImplementedError
+        """How a kind of fluid or state answers for one property."""
 
     @property
     def density(self) -> Any:

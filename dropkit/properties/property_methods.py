@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from abc import ABC, abstractmethod
 from typing import Any, overload
 
 from dropkit.validity import Outside
@@ -9,7 +10,7 @@ from dropkit.validity import Outside
 __all__ = ["PropertyMethods"]
 
 
-class PropertyMethods:
+class PropertyMethods(ABC):
     """Every property as a method of temperature [K, or with a unit].
 
     Floats and arrays are SI and give SI back, a Series comes back as a Series; anything with a
@@ -26,8 +27,9 @@ class PropertyMethods:
     789.3 kilogram / meter ** 3
     """
 
+    @abstractmethod
     def _look(self, prop: str, temperature: Any, outside: Outside) -> Any:
-        raise NotImplementedError
+        """How a kind of fluid or state answers for one property."""
 
     # One overload pair each: floats give float, anything else depends on what is asked.
 

@@ -2,17 +2,20 @@
 
 from __future__ import annotations
 
+from abc import ABC, abstractmethod
+
 from dropkit.properties.property_words import GRADED
 from dropkit.provenance import Grade, Trail, worst_grade
 
 __all__ = ["Traced"]
 
 
-class Traced:
+class Traced(ABC):
     """Numbers, each with the trail of how it was made: of a fluid, or at one condition."""
 
     __slots__ = ()
 
+    @abstractmethod
     def available(self) -> tuple[str, ...]:
         """Names of the properties that can be asked.
 
@@ -21,8 +24,8 @@ class Traced:
         tuple of str
             In the order of tables.
         """
-        raise NotImplementedError
 
+    @abstractmethod
     def trail(self, prop: str) -> Trail:
         """How a property was made.
 
@@ -42,7 +45,6 @@ class Traced:
         >>> dk.air("20 degC").trail("density").method
         'virial equation with second and third coefficients'
         """
-        raise NotImplementedError
 
     def grade(self, prop: str | None = None) -> Grade:
         """The grade of a property, or the worst of density, viscosity and surface tension.

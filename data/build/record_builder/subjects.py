@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import tomllib
+from abc import ABC, abstractmethod
 from collections.abc import Mapping, Sequence
 from dataclasses import dataclass, field
 from functools import cached_property
@@ -82,7 +83,7 @@ class Pure:
 
 
 @dataclass(frozen=True)
-class Subject:
+class Subject(ABC):
     """Common ground of liquids and pairs."""
 
     name: str
@@ -104,13 +105,15 @@ class Subject:
         """Which points can enter a fit or a comparison."""
         return [True] * len(points)
 
+    @abstractmethod
     def fit(self, prop: str, block: Mapping[str, Any], points: Sequence[Point]) -> Parameters:
-        raise NotImplementedError
+        """The parameters of a form that meet the points best."""
 
+    @abstractmethod
     def values(
         self, prop: str, form: str, parameters: Mapping[str, Any], T: Array, w: Array
     ) -> Array:
-        raise NotImplementedError
+        """A property by a form and its parameters."""
 
     def water_slope(
         self, prop: str, form: str, parameters: Mapping[str, Any], T: Array, w: Array
